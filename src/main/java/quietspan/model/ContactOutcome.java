@@ -1,0 +1,15 @@
+package quietspan.model;
+
+import quietspan.time.Interval;
+import quietspan.time.OnboardInstant;
+import quietspan.units.DataVolume;
+
+/**
+ * What becomes of a contact.
+ *
+ * @param onboard its image on board: begin rounded up and end rounded down to the second
+ * @param capacity what could be sent after locks, overhead and the usable share
+ * @param delivered what was sent
+ */
+public record ContactOutcome(
+    String contact, Interval<OnboardInstant> onboard, DataVolume capacity, DataVolume delivered) {}

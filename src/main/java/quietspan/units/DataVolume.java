@@ -1,0 +1,27 @@
+package quietspan.units;
+
+/** An amount of data in whole bits, never negative. */
+public record DataVolume(long bits) implements Comparable<DataVolume> {
+
+  public static final DataVolume ZERO = new DataVolume(0);
+
+  public DataVolume {
+    if (bits < 0) {
+      throw new IllegalArgumentException("a data volume is not negative: " + bits);
+    }
+  }
+
+  public static DataVolume ofBits(long bits) {
+    return new DataVolume(bits);
+  }
+
+  /** 1 Gbit is 1 000 000 000 bit. */
+  public double gigabits() {
+    return bits / 1e9;
+  }
+
+  @Override
+  public int compareTo(DataVolume other) {
+    return Long.compare(bits, other.bits);
+  }
+}
