@@ -3,7 +3,8 @@ package quietspan.model;
 import quietspan.units.Angle;
 
 /**
- * A held body direction of an antenna, in hundredths of a degree: the grid on which aims are decided.
+ * A held body direction of an antenna, in hundredths of a degree: the grid on which aims are
+ * decided.
  *
  * @param azimuthCentidegrees from body X towards body Y, 0 to 35 999
  * @param elevationCentidegrees from the body X-Y plane towards body Z, -9 000 to 9 000

@@ -13,8 +13,7 @@ public record BodyDirection(double azimuthRadians, double elevationRadians) {
    * keeps its accuracy at small angles (Sinnott, Sky and Telescope 68:159, 1984; from memory).
    */
   public double separation(BodyDirection other) {
-    double sinHalfElevation =
-        StrictMath.sin((elevationRadians - other.elevationRadians) / 2);
+    double sinHalfElevation = StrictMath.sin((elevationRadians - other.elevationRadians) / 2);
     double sinHalfAzimuth = StrictMath.sin((azimuthRadians - other.azimuthRadians) / 2);
     double h =
         sinHalfElevation * sinHalfElevation

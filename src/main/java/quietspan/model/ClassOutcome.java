@@ -5,8 +5,8 @@ import java.util.OptionalDouble;
 /**
  * What becomes of a data class.
  *
- * @param longestLatencySeconds of the bits delivered or still aboard at the end; absent when there are
- *     none
+ * @param longestLatencySeconds of the bits delivered or still aboard at the end; absent when there
+ *     are none
  */
 public record ClassOutcome(
     String dataClass,

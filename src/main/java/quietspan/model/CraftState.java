@@ -11,8 +11,8 @@ import quietspan.units.DataVolume;
  *
  * @param aim where its antenna is held
  * @param fill what its store holds, one entry per data class that is there
- * @param lastContactEnd end of its last contact before the period; absent: the start of the period plus
- *     light time
+ * @param lastContactEnd end of its last contact before the period; absent: the start of the period
+ *     plus light time
  * @param lastRepoint start of its last repoint; absent: long ago
  */
 public record CraftState(
@@ -25,8 +25,8 @@ public record CraftState(
   /**
    * Data aboard at the start.
    *
-   * @param oldest generation instant of the oldest bit, ages linear to the start of the period; absent:
-   *     all made at the start
+   * @param oldest generation instant of the oldest bit, ages linear to the start of the period;
+   *     absent: all made at the start
    */
   public record Fill(String dataClass, DataVolume volume, Optional<OnboardInstant> oldest) {}
 

@@ -15,8 +15,8 @@ import quietspan.units.Angle;
  * @param deadZones azimuth sectors in which nothing is received
  * @param setup before the contact, the antenna busy
  * @param teardown after the contact, the antenna busy
- * @param changeover least time between two of our contacts with different craft on this antenna, in place
- *     of teardown and setup; equal to their sum where no shorter one is given
+ * @param changeover least time between two of our contacts with different craft on this antenna, in
+ *     place of teardown and setup; equal to their sum where no shorter one is given
  * @param minimumContact shortest contact
  * @param maximumContact longest contact
  * @param costPerHour station cost units per hour of contact

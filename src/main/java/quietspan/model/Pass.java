@@ -5,8 +5,8 @@ import quietspan.time.Interval;
 import quietspan.units.Angle;
 
 /**
- * A station sees a craft above its mask without a break. Ground receive time, light time applied, not
- * rounded. Keyholes, Sun limits, outages and bookings are not applied.
+ * A station sees a craft above its mask without a break. Ground receive time, light time applied,
+ * not rounded. Keyholes, Sun limits, outages and bookings are not applied.
  *
  * @param culmination instant of the highest elevation inside the visible stretch
  * @param clipped the visible stretch is cut by the period or by the end of the ephemeris

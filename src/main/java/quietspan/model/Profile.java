@@ -5,8 +5,8 @@ import quietspan.time.OnboardInstant;
 import quietspan.units.DataRate;
 
 /**
- * A data rate that is constant between given on-board instants. The first step also holds before its
- * instant, the last one for ever.
+ * A data rate that is constant between given on-board instants. The first step also holds before
+ * its instant, the last one for ever.
  */
 public record Profile(List<Step> steps) {
 

@@ -6,8 +6,8 @@ import java.util.List;
  * Where a plan comes from.
  *
  * @param version of the program
- * @param stepsDone search steps that led to these decisions; {@code --effort} with this number gives
- *     the same decisions
+ * @param stepsDone search steps that led to these decisions; {@code --effort} with this number
+ *     gives the same decisions
  */
 public record Provenance(
     String version,

@@ -104,8 +104,7 @@ public enum RuleId {
       Clock.ONBOARD,
       Unit.BIT,
       "No store is filled beyond its capacity; what does not fit is lost."),
-  FILL(
-      Kind.DATA, Clock.ONBOARD, Unit.BIT_SECOND, "No store is filled beyond the planned limit."),
+  FILL(Kind.DATA, Clock.ONBOARD, Unit.BIT_SECOND, "No store is filled beyond the planned limit."),
   LATENCY(
       Kind.DATA,
       Clock.GROUND,
@@ -122,7 +121,10 @@ public enum RuleId {
       Unit.SECOND,
       "No craft is longer without a contact of its own than the limit."),
   END_FILL(
-      Kind.DATA, Clock.ONBOARD, Unit.BIT, "At the end of the period each store is below its limit."),
+      Kind.DATA,
+      Clock.ONBOARD,
+      Unit.BIT,
+      "At the end of the period each store is below its limit."),
   END_COVERAGE(
       Kind.DATA,
       Clock.ONBOARD,

@@ -5,23 +5,27 @@ import quietspan.time.Interval;
 import quietspan.time.OnboardInstant;
 
 /**
- * Geometry to be sampled: the one thing that the planner and the check both read, and the only place
- * where ground time and on-board time convert. Craft and stations are named as in the scenario;
- * implementations are immutable, may be shared between threads, and throw {@link
+ * Geometry to be sampled: the one thing that the planner and the check both read, and the only
+ * place where ground time and on-board time convert. Craft and stations are named as in the
+ * scenario; implementations are immutable, may be shared between threads, and throw {@link
  * IllegalArgumentException} for an unknown name or an instant outside {@link #known}.
  *
- * <p>One-way light time between craft and ground always means the Earth's centre here; the station's
- * place on the Earth adds at most 21 ms.
+ * <p>One-way light time between craft and ground always means the Earth's centre here; the
+ * station's place on the Earth adds at most 21 ms.
  */
 public interface SightLines {
 
   /** Ground receive instants over which everything about this craft can be asked. */
   Interval<GroundInstant> known(String craft);
 
-  /** Downlink one-way light time of the wave received at the Earth's centre at {@code receive} (s). */
+  /**
+   * Downlink one-way light time of the wave received at the Earth's centre at {@code receive} (s).
+   */
   double downlinkSeconds(String craft, GroundInstant receive);
 
-  /** Uplink one-way light time of the wave that leaves the Earth's centre at {@code transmit} (s). */
+  /**
+   * Uplink one-way light time of the wave that leaves the Earth's centre at {@code transmit} (s).
+   */
   double uplinkSeconds(String craft, GroundInstant transmit);
 
   /** On-board instant at which the wave received at {@code receive} left the craft. */

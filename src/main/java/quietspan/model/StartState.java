@@ -9,8 +9,8 @@ import quietspan.time.OnboardInstant;
  * The formation at the start of the period.
  *
  * @param quietSince when the present quiet span began; absent: at the start of the period
- * @param lastContactEnd end of the formation's last contact; absent: the latest of its craft's, else
- *     the start of the period plus light time
+ * @param lastContactEnd end of the formation's last contact; absent: the latest of its craft's,
+ *     else the start of the period plus light time
  */
 public record StartState(
     Optional<OnboardInstant> quietSince,

@@ -3,9 +3,9 @@ package quietspan.model;
 import quietspan.units.Angle;
 
 /**
- * How an antenna can be aimed. Azimuth limits run from {@code azimuthFrom} eastwards (increasing) to
- * {@code azimuthTo}; equal values mean the whole circle. A step of zero means the grid of hundredths of
- * a degree; otherwise aims lie at the lower limit plus whole steps.
+ * How an antenna can be aimed. Azimuth limits run from {@code azimuthFrom} eastwards (increasing)
+ * to {@code azimuthTo}; equal values mean the whole circle. A step of zero means the grid of
+ * hundredths of a degree; otherwise aims lie at the lower limit plus whole steps.
  */
 public sealed interface Steering {
 

@@ -6,8 +6,8 @@ import java.time.Instant;
 /**
  * An instant on one of the two clocks of this job, written as UTC.
  *
- * <p>Arithmetic is that of {@link Instant}: every day has 86 400 s. No leap second is announced after
- * 2017, so a difference of two instants of one period is the elapsed time.
+ * <p>Arithmetic is that of {@link Instant}: every day has 86 400 s. No leap second is announced
+ * after 2017, so a difference of two instants of one period is the elapsed time.
  *
  * @param <T> the clock
  */

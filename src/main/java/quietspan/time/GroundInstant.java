@@ -2,7 +2,10 @@ package quietspan.time;
 
 import java.time.Instant;
 
-/** An instant on the ground clock: the wave is at the station (or at the Earth's centre). Written as UTC. */
+/**
+ * An instant on the ground clock: the wave is at the station (or at the Earth's centre). Written as
+ * UTC.
+ */
 public record GroundInstant(Instant utc) implements ClockInstant<GroundInstant> {
 
   public GroundInstant {

@@ -5,8 +5,8 @@ import java.util.Objects;
 import java.util.Optional;
 
 /**
- * A stretch of time on one clock: half-open {@code [begin, end)} and never empty. Touching intervals
- * do not overlap.
+ * A stretch of time on one clock: half-open {@code [begin, end)} and never empty. Touching
+ * intervals do not overlap.
  *
  * @param <T> the clock
  */
@@ -16,7 +16,8 @@ public record Interval<T extends ClockInstant<T>>(T begin, T end) {
     Objects.requireNonNull(begin, "begin");
     Objects.requireNonNull(end, "end");
     if (!begin.isBefore(end)) {
-      throw new IllegalArgumentException("an interval needs begin before end: " + begin + ", " + end);
+      throw new IllegalArgumentException(
+          "an interval needs begin before end: " + begin + ", " + end);
     }
   }
 
@@ -62,7 +63,8 @@ public record Interval<T extends ClockInstant<T>>(T begin, T end) {
   /** The smallest interval that holds both. */
   public Interval<T> hull(Interval<T> other) {
     return new Interval<>(
-        begin.isBefore(other.begin) ? begin : other.begin, end.isAfter(other.end) ? end : other.end);
+        begin.isBefore(other.begin) ? begin : other.begin,
+        end.isAfter(other.end) ? end : other.end);
   }
 
   /** This interval made longer at both ends (before and after at least zero). */
