@@ -12,8 +12,7 @@ final class Aiming {
   /** The aim that has the Earth as near its centre as the antenna allows at a second on board. */
   static Aim at(Tables tables, int craft, int second) {
     int sample = Math.max(0, Math.min(tables.samples - 1, second / Tables.STEP));
-    return nearest(
-        tables, craft, tables.azimuth[craft][sample], tables.elevation[craft][sample]);
+    return nearest(tables, craft, tables.azimuth[craft][sample], tables.elevation[craft][sample]);
   }
 
   /** The aim nearest to a body direction (rad) within travel and on the steps. */
@@ -24,7 +23,12 @@ final class Aiming {
       double el =
           Math.max(
               axes.elevationFrom().radians(), Math.min(axes.elevationTo().radians(), elevation));
-      el = stepped(el, axes.elevationFrom().radians(), axes.step().radians(), axes.elevationTo().radians());
+      el =
+          stepped(
+              el,
+              axes.elevationFrom().radians(),
+              axes.step().radians(),
+              axes.elevationTo().radians());
       return Aim.nearest(Angle.ofRadians(az), Angle.ofRadians(el));
     }
     Steering.AzimuthOnly fixed = (Steering.AzimuthOnly) steering;

@@ -6,11 +6,12 @@ import quietspan.model.Craft;
 import quietspan.model.Steering;
 
 /**
- * Which cells one aim can serve together. An aim that serves at two instants is within the usable cone of
- * the Earth at both; for two axes that means the two Earth directions are at most two half-cones apart, for
- * a fixed elevation that the azimuths which hold the Earth at either instant overlap. That pairwise test
- * with the opening cell is all that is asked in the optimistic sense, so it holds for paths that bend or
- * return, too. In the planning sense the whole arc between must fit into one cone.
+ * Which cells one aim can serve together. An aim that serves at two instants is within the usable
+ * cone of the Earth at both; for two axes that means the two Earth directions are at most two
+ * half-cones apart, for a fixed elevation that the azimuths which hold the Earth at either instant
+ * overlap. That pairwise test with the opening cell is all that is asked in the optimistic sense,
+ * so it holds for paths that bend or return, too. In the planning sense the whole arc between must
+ * fit into one cone.
  */
 final class Beams {
 
@@ -89,8 +90,7 @@ final class Beams {
   }
 
   private int lastSample(int cell) {
-    return Math.min(
-        tables.samples - 1, ((cell + 1) * cellLength + Tables.STEP - 1) / Tables.STEP);
+    return Math.min(tables.samples - 1, ((cell + 1) * cellLength + Tables.STEP - 1) / Tables.STEP);
   }
 
   private void summarise(int c, Steering steering, int cell) {
@@ -128,7 +128,9 @@ final class Beams {
     reachable[c][cell] = optimistic ? any : all;
   }
 
-  /** Half the width of the azimuths that hold a direction from a fixed elevation; negative for none. */
+  /**
+   * Half the width of the azimuths that hold a direction from a fixed elevation; negative for none.
+   */
   private static double halfWidth(double aimElevation, double elevation, double usable) {
     double cos =
         (StrictMath.cos(usable) - StrictMath.sin(aimElevation) * StrictMath.sin(elevation))
@@ -140,8 +142,7 @@ final class Beams {
   }
 
   /** Whether some aim inside the travel is within the usable cone of a direction, generously. */
-  private boolean withinTravel(
-      Steering steering, double azimuth, double elevation, double usable) {
+  private boolean withinTravel(Steering steering, double azimuth, double elevation, double usable) {
     if (!(steering instanceof Steering.TwoAxes axes)) {
       return true;
     }
@@ -238,8 +239,7 @@ final class Beams {
     int middle = (firstSample(cell) + lastSample(cell)) / 2;
     double azimuth = Math.max(low, Math.min(high, tables.azimuth[c][middle]));
     return new BodyDirection(azimuth, fixed.elevation().radians())
-        .separation(
-            new BodyDirection(tables.azimuth[c][middle], tables.elevation[c][middle]));
+        .separation(new BodyDirection(tables.azimuth[c][middle], tables.elevation[c][middle]));
   }
 
   private boolean isMonotone(int c) {
@@ -259,8 +259,7 @@ final class Beams {
   }
 
   private void start(int c, Craft craft, int cells) {
-    BodyDirection aim =
-        tables.scenario.start().of(craft.name()).aim().direction();
+    BodyDirection aim = tables.scenario.start().of(craft.name()).aim().direction();
     startLast[c] = -1;
     for (int cell = 0; cell < cells; cell++) {
       double nearest = Double.MAX_VALUE;

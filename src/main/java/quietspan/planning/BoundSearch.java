@@ -8,10 +8,11 @@ import quietspan.model.Bound;
 import quietspan.model.Waiver;
 
 /**
- * Proves how much science any legal plan loses at least, and how many pauses it needs at least. The grid
- * is refined step by step; on each grid the programme is asked whether a plan can lose less than a rising
- * cutoff, so that the answer "no" to any of them is already a bound, whenever the work allowed is used up.
- * The work is counted in labels, never in seconds, so that the same scenario gives the same bound.
+ * Proves how much science any legal plan loses at least, and how many pauses it needs at least. The
+ * grid is refined step by step; on each grid the programme is asked whether a plan can lose less
+ * than a rising cutoff, so that the answer "no" to any of them is already a bound, whenever the
+ * work allowed is used up. The work is counted in labels, never in seconds, so that the same
+ * scenario gives the same bound.
  */
 final class BoundSearch {
 
@@ -81,7 +82,10 @@ final class BoundSearch {
       }
     }
     for (int finer : grids) {
-      Cells fine = finer == coarse ? cells : new Cells(tables, links, waivers, relaxed, Cells.Shade.NONE, finer);
+      Cells fine =
+          finer == coarse
+              ? cells
+              : new Cells(tables, links, waivers, relaxed, Cells.Shade.NONE, finer);
       boolean found = false;
       while (!found && proved < top) {
         long cutoff = Math.min(top, proved + rise);
@@ -128,8 +132,7 @@ final class BoundSearch {
     List<Bound.Relaxation> chain = new ArrayList<>();
     for (Relaxation relaxation : Relaxation.values()) {
       chain.add(
-          new Bound.Relaxation(
-              relaxation.title(), relaxation.sentence(), Optional.<Long>empty()));
+          new Bound.Relaxation(relaxation.title(), relaxation.sentence(), Optional.<Long>empty()));
     }
     return new Bound(
         loss.map(seconds -> tables.length - seconds),

@@ -15,14 +15,16 @@ import quietspan.model.Waiver;
 import quietspan.units.DataRate;
 
 /**
- * The period cut into cells, with everything that {@link Programme} may ask about them. With
- * every {@link Relaxation} in force each answer is at least as favourable as any legal second-resolution
- * plan finds it, so that what the programme proves holds for all of them; with only the unavoidable ones the
- * answers are close to what contacts on real passes achieve.
+ * The period cut into cells, with everything that {@link Programme} may ask about them. With every
+ * {@link Relaxation} in force each answer is at least as favourable as any legal second-resolution
+ * plan finds it, so that what the programme proves holds for all of them; with only the unavoidable
+ * ones the answers are close to what contacts on real passes achieve.
  */
 final class Cells {
 
-  /** An interruption that begins in a cell (seconds since the begin of the period, clipped to it). */
+  /**
+   * An interruption that begins in a cell (seconds since the begin of the period, clipped to it).
+   */
   record Stop(int begin, int end, boolean closeToPrevious) {
     int length() {
       return end - begin;
@@ -40,9 +42,17 @@ final class Cells {
    * @param joinsUntil when it merges: until when a later repoint may belong to the same pause
    */
   record PauseOption(
-      int earliestStart, int latestStart, int bestStart, int extra, boolean merges, int joinsUntil) {}
+      int earliestStart,
+      int latestStart,
+      int bestStart,
+      int extra,
+      boolean merges,
+      int joinsUntil) {}
 
-  /** How a skeleton is kept away from what the sampled geometry promises; a bound uses {@link #NONE}. */
+  /**
+   * How a skeleton is kept away from what the sampled geometry promises; a bound uses {@link
+   * #NONE}.
+   */
   record Shade(double capacityShare, int latencySlack, double fillShare, double gapShare) {
     static final Shade NONE = new Shade(1, 0, 1, 1);
   }
@@ -153,7 +163,8 @@ final class Cells {
         scenario
             .start()
             .lastContactEnd()
-            .map(end -> (int) (end.epochSecond() - tables.epoch - (long) tables.lightTime[0][0]) - 1)
+            .map(
+                end -> (int) (end.epochSecond() - tables.epoch - (long) tables.lightTime[0][0]) - 1)
             .orElse(0);
 
     this.levelLengths =
@@ -346,7 +357,9 @@ final class Cells {
     return levelLengths[pauseLevel];
   }
 
-  /** The ways to start a pause in a cell, or null where a protected interval or the end forbids it. */
+  /**
+   * The ways to start a pause in a cell, or null where a protected interval or the end forbids it.
+   */
   PauseOption pause(int cell, int pauseLevel) {
     return pauses[pauseLevel][cell];
   }
@@ -559,8 +572,7 @@ final class Cells {
         if (!fill.dataClass().equals(dataClass.name())) {
           continue;
         }
-        long since =
-            fill.oldest().map(instant -> instant.epochSecond() - tables.epoch).orElse(0L);
+        long since = fill.oldest().map(instant -> instant.epochSecond() - tables.epoch).orElse(0L);
         if (since >= oldest) {
           young += fill.volume().bits();
         } else {
@@ -600,14 +612,18 @@ final class Cells {
     return true;
   }
 
-  /** Shortest latency limit among classes that some craft makes at every instant, pauses included (s). */
+  /**
+   * Shortest latency limit among classes that some craft makes at every instant, pauses included
+   * (s).
+   */
   private long steadyLatency() {
     long shortest = Integer.MAX_VALUE;
     for (Craft craft : tables.scenario.craft()) {
       for (Generation generation : craft.generation()) {
         boolean always =
             generation.profile().steps().stream()
-                .allMatch(step -> step.rate().share(generation.shareInPauses()).bitsPerSecond() > 0);
+                .allMatch(
+                    step -> step.rate().share(generation.shareInPauses()).bitsPerSecond() > 0);
         if (always) {
           shortest =
               Math.min(
@@ -656,12 +672,14 @@ final class Cells {
     boolean merges = false;
     int joins = 0;
     starts.sort(null);
-    int reach = relaxed.contains(Relaxation.JOINED_PAUSES) ? (craftCount - 1) * longestRepoint() : 0;
+    int reach =
+        relaxed.contains(Relaxation.JOINED_PAUSES) ? (craftCount - 1) * longestRepoint() : 0;
     for (int start : starts) {
       if (start < first || start > last || isGuarded(start, start + repoint, guarded)) {
         continue;
       }
-      if (!relaxed.contains(Relaxation.JOINED_PAUSES) && joinsGuarded(start, start + repoint, guarded)) {
+      if (!relaxed.contains(Relaxation.JOINED_PAUSES)
+          && joinsGuarded(start, start + repoint, guarded)) {
         continue;
       }
       earliest = Math.min(earliest, start);
@@ -670,7 +688,8 @@ final class Cells {
       boolean touches = false;
       for (List<Stop> list : stops) {
         for (Stop stop : list) {
-          more -= Math.max(0, Math.min(stop.end(), start + repoint) - Math.max(stop.begin(), start));
+          more -=
+              Math.max(0, Math.min(stop.end(), start + repoint) - Math.max(stop.begin(), start));
           if (start - reach <= stop.end() && start + repoint + reach >= stop.begin()) {
             touches = true;
             joins = Math.max(joins, stop.end() + reach);
@@ -702,7 +721,10 @@ final class Cells {
     return new PauseOption(earliest, latest, best, extra, merges, joins);
   }
 
-  /** Whether the pause that a repoint makes together with interruptions overlaps a protected interval. */
+  /**
+   * Whether the pause that a repoint makes together with interruptions overlaps a protected
+   * interval.
+   */
   private boolean joinsGuarded(int from, int to, List<Guarded> guarded) {
     int begin = from;
     int end = to;

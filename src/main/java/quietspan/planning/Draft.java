@@ -5,8 +5,8 @@ import java.util.Comparator;
 import java.util.List;
 
 /**
- * A plan in the making: immutable repoints with the holds and pauses that follow from them. Contacts are
- * kept apart, since they change far more often.
+ * A plan in the making: immutable repoints with the holds and pauses that follow from them.
+ * Contacts are kept apart, since they change far more often.
  */
 final class Draft {
 
@@ -101,8 +101,8 @@ final class Draft {
   }
 
   /**
-   * Seconds by which repoints break what a written plan must keep: the period, protected intervals, and
-   * the spacing of repoints.
+   * Seconds by which repoints break what a written plan must keep: the period, protected intervals,
+   * and the spacing of repoints.
    */
   long breaches() {
     long seconds = 0;

@@ -6,8 +6,8 @@ import java.util.Collections;
 import java.util.List;
 
 /**
- * The contacts that bring down most data under given holds, one at a time, by a dynamic programme over a
- * grid of ground time. It is the richest roster to start trimming from.
+ * The contacts that bring down most data under given holds, one at a time, by a dynamic programme
+ * over a grid of ground time. It is the richest roster to start trimming from.
  */
 final class FullSchedule {
 
@@ -22,7 +22,10 @@ final class FullSchedule {
   private final int lockUp;
   private final int switching;
 
-  /** Best value with everything ended by a grid instant, by antenna of the last contact (last: none). */
+  /**
+   * Best value with everything ended by a grid instant, by antenna of the last contact (last:
+   * none).
+   */
   private final long[][] best;
 
   private final Use[][] chosen;
@@ -111,7 +114,9 @@ final class FullSchedule {
     return uses;
   }
 
-  /** Grid cells that confirmed contacts, with switching and setup around them, keep for themselves. */
+  /**
+   * Grid cells that confirmed contacts, with switching and setup around them, keep for themselves.
+   */
   private boolean[] closed() {
     boolean[] cells = new boolean[count + 1];
     for (Use use : fixed) {
@@ -165,8 +170,7 @@ final class FullSchedule {
       if ((j - i) * GRID < shortest) {
         continue;
       }
-      long bits =
-          tables.effective[craft][step] * Math.max(0, (j - i) * GRID - lockUp - 2);
+      long bits = tables.effective[craft][step] * Math.max(0, (j - i) * GRID - lockUp - 2);
       if (value + bits > best[j][run.antenna()]) {
         best[j][run.antenna()] = value + bits;
         chosen[j][run.antenna()] = new Use(craft, run.antenna(), i * GRID, j * GRID, step);

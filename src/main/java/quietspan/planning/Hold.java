@@ -6,8 +6,8 @@ import quietspan.model.Aim;
 import quietspan.model.BodyDirection;
 
 /**
- * The time between two repoints of a craft, with the stretches in which its aim has the Earth in the usable
- * cone. Seconds on board since the begin of the period.
+ * The time between two repoints of a craft, with the stretches in which its aim has the Earth in
+ * the usable cone. Seconds on board since the begin of the period.
  */
 final class Hold {
 
@@ -46,7 +46,8 @@ final class Hold {
     double dx = unit[3 * sample] - x;
     double dy = unit[3 * sample + 1] - y;
     double dz = unit[3 * sample + 2] - z;
-    // asin(s) = s + s^3/6 + ...: good to 1e-7 rad for the few degrees of a beam; far away any value does.
+    // asin(s) = s + s^3/6 + ...: good to 1e-7 rad for the few degrees of a beam; far away any value
+    // does.
     double half = Math.sqrt(dx * dx + dy * dy + dz * dz) / 2;
     return half > 0.1 ? 2 * half : 2 * (half + half * half * half / 6);
   }

@@ -11,10 +11,10 @@ import quietspan.model.Scenario;
 import quietspan.model.Waiver;
 
 /**
- * The stores in steps of ten minutes, for the search: amounts are whole bits, ages are read on the safe
- * side by up to two steps. The ledger remembers the state at the begin of every day, so that after a change
- * only the days from the change until the stores are as before are gone through again. What it finds legal
- * is handed to the exact simulation before it is believed.
+ * The stores in steps of ten minutes, for the search: amounts are whole bits, ages are read on the
+ * safe side by up to two steps. The ledger remembers the state at the begin of every day, so that
+ * after a change only the days from the change until the stores are as before are gone through
+ * again. What it finds legal is handed to the exact simulation before it is believed.
  */
 final class Ledger {
 
@@ -277,7 +277,9 @@ final class Ledger {
     return new Score(lost, late + aboard, fill, over);
   }
 
-  /** What aboard at the end may exceed the delivery limits by: light time and delivery do not count. */
+  /**
+   * What aboard at the end may exceed the delivery limits by: light time and delivery do not count.
+   */
   private int ground(int k) {
     return 0;
   }
@@ -362,7 +364,8 @@ final class Ledger {
         day.total[c][k] = total[c][k];
         day.head[c][k] = Math.min(head[c][k], step + older + 1);
         day.bins[c][k] =
-            Arrays.copyOfRange(bins[c][k], day.head[c][k], Math.min(bins[c][k].length, step + older + 1));
+            Arrays.copyOfRange(
+                bins[c][k], day.head[c][k], Math.min(bins[c][k].length, step + older + 1));
       }
     }
     day.lost = lost;
@@ -377,7 +380,8 @@ final class Ledger {
         total[c][k] = day.total[c][k];
         head[c][k] = day.head[c][k];
         System.arraycopy(day.bins[c][k], 0, bins[c][k], day.head[c][k], day.bins[c][k].length);
-        Arrays.fill(bins[c][k], Math.min(bins[c][k].length, step + older + 1), bins[c][k].length, 0);
+        Arrays.fill(
+            bins[c][k], Math.min(bins[c][k].length, step + older + 1), bins[c][k].length, 0);
       }
     }
     lost = day.lost;

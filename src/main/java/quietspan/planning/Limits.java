@@ -15,7 +15,9 @@ final class Limits {
     return share(craft.store().bits(), scenario.rules().margins().plannedFillShare());
   }
 
-  /** Fill allowed at the end of the period: the share given, else the larger of start fill and 25 %. */
+  /**
+   * Fill allowed at the end of the period: the share given, else the larger of start fill and 25 %.
+   */
   static long endFillBits(Scenario scenario, Craft craft) {
     return scenario
         .rules()
@@ -24,8 +26,7 @@ final class Limits {
         .map(share -> share(craft.store().bits(), share))
         .orElseGet(
             () ->
-                Math.max(
-                    startFillBits(scenario, craft.name()), share(craft.store().bits(), 0.25)));
+                Math.max(startFillBits(scenario, craft.name()), share(craft.store().bits(), 0.25)));
   }
 
   static long startFillBits(Scenario scenario, String craft) {

@@ -12,7 +12,8 @@ final class Links {
   /**
    * A stretch in which an antenna could hear a craft.
    *
-   * @param begin ground receive time, seconds since the instant that the period's begin reads on board
+   * @param begin ground receive time, seconds since the instant that the period's begin reads on
+   *     board
    * @param end as begin, exclusive
    */
   record Window(int craft, int antenna, int begin, int end) {}
@@ -92,7 +93,9 @@ final class Links {
     return optimistic ? Math.min(sum, fastest * Tables.STEP) : best;
   }
 
-  /** Most bits that a set of craft can bring down in one interval with as many links as are allowed. */
+  /**
+   * Most bits that a set of craft can bring down in one interval with as many links as are allowed.
+   */
   long together(int mask, int sample, boolean optimistic) {
     if (Integer.bitCount(mask) == 1) {
       return alone(Integer.numberOfTrailingZeros(mask), sample, 0, optimistic);
@@ -138,8 +141,7 @@ final class Links {
         long bits = rate(c, a, sample, 0, optimistic) * (optimistic ? Tables.STEP : available);
         best =
             Math.max(
-                best,
-                bits + matching(rest, sample, left - 1, antennasUsed | 1 << a, optimistic));
+                best, bits + matching(rest, sample, left - 1, antennasUsed | 1 << a, optimistic));
       }
     }
     return best;

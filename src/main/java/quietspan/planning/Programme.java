@@ -7,15 +7,15 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * The dynamic programme over the whole period that places pauses and lets each craft's beam open and
- * close. Time runs in cells; a label says, for every craft, whether its aim is still free, opened at some
- * cell, or spent, how many bits the formation holds, how old the present quiet span is, and how much
- * science is lost so far. An aim is not chosen when the antenna moves but when the beam is first used,
- * so the order of the craft, gaps in coverage, aims kept over a pause and a craft that serves twice
- * between two pauses all come out of the same recursion.
+ * The dynamic programme over the whole period that places pauses and lets each craft's beam open
+ * and close. Time runs in cells; a label says, for every craft, whether its aim is still free,
+ * opened at some cell, or spent, how many bits the formation holds, how old the present quiet span
+ * is, and how much science is lost so far. An aim is not chosen when the antenna moves but when the
+ * beam is first used, so the order of the craft, gaps in coverage, aims kept over a pause and a
+ * craft that serves twice between two pauses all come out of the same recursion.
  *
- * <p>What a cell may do is asked from a {@link Cells}: with optimistic cells the least loss is a bound on
- * every legal plan; with planning cells the best label is a skeleton to build a plan on.
+ * <p>What a cell may do is asked from a {@link Cells}: with optimistic cells the least loss is a
+ * bound on every legal plan; with planning cells the best label is a skeleton to build a plan on.
  */
 final class Programme {
 
@@ -27,10 +27,14 @@ final class Programme {
     PAUSES
   }
 
-  /** A repoint pause of a skeleton: seconds since the begin of the period, bit mask of moved craft. */
+  /**
+   * A repoint pause of a skeleton: seconds since the begin of the period, bit mask of moved craft.
+   */
   record PauseStep(int cell, int start, int movedMask) {}
 
-  /** A beam opened at a cell; {@code closed} is the last cell it was able to serve in this solution. */
+  /**
+   * A beam opened at a cell; {@code closed} is the last cell it was able to serve in this solution.
+   */
   record Opening(int craft, int cell) {}
 
   /**
@@ -96,7 +100,10 @@ final class Programme {
     int openedMask;
     long total;
 
-    /** Grows with every craft that is better off; sorts labels so that none is beaten by a later one. */
+    /**
+     * Grows with every craft that is better off; sorts labels so that none is beaten by a later
+     * one.
+     */
     long standing;
   }
 
@@ -137,9 +144,9 @@ final class Programme {
   }
 
   /**
-   * First cell that cannot be lived through without a pause in it or before, when all aims are free and
-   * all stores are empty at the begin of a cell, and a pause that ends there still saves data; the number
-   * of cells when there is none.
+   * First cell that cannot be lived through without a pause in it or before, when all aims are free
+   * and all stores are empty at the begin of a cell, and a pause that ends there still saves data;
+   * the number of cells when there is none.
    */
   int reach(int from, int savingCells) {
     Label label = first();
@@ -209,7 +216,10 @@ final class Programme {
     return label;
   }
 
-  /** Bit masks of the craft whose free beam could open in a cell, and of those whose open beam serves. */
+  /**
+   * Bit masks of the craft whose free beam could open in a cell, and of those whose open beam
+   * serves.
+   */
   private int[] freeAndOpen(Label label, int cell) {
     int free = 0;
     int open = 0;
@@ -401,9 +411,10 @@ final class Programme {
     next.cell = cell;
     if (keepParents) {
       // Cells without an event are skipped on the way back.
-      next.parent = label.movedMask != 0 || label.openedMask != 0 || label.parent == null
-          ? label
-          : label.parent;
+      next.parent =
+          label.movedMask != 0 || label.openedMask != 0 || label.parent == null
+              ? label
+              : label.parent;
       next.pauseStart = pauseStart;
       next.movedMask = moved;
       next.openedMask = opened;
@@ -420,8 +431,8 @@ final class Programme {
   }
 
   /**
-   * What ending a span costs beyond the warm-up already charged at its begin: everything when even its
-   * longest reading is too short to count, nothing otherwise.
+   * What ending a span costs beyond the warm-up already charged at its begin: everything when even
+   * its longest reading is too short to count, nothing otherwise.
    */
   private long spanCost(int latestEnd, int earliestBegin, int earliestEnd, int latestBegin) {
     if (earliestBegin == cells.longAgo()) {
@@ -511,7 +522,10 @@ final class Programme {
     return false;
   }
 
-  /** Whether every way to go on from {@code worse} can be copied from {@code better} at no more loss. */
+  /**
+   * Whether every way to go on from {@code worse} can be copied from {@code better} at no more
+   * loss.
+   */
   private boolean beats(Label better, Label worse, int cell) {
     if (better.loss > worse.loss || better.total > worse.total) {
       return false;

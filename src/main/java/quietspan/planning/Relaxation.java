@@ -4,9 +4,9 @@ import java.util.EnumSet;
 import java.util.Set;
 
 /**
- * What the bound gives up against the rules, one entry per step of the chain, and why each keeps it valid:
- * an answer that is more favourable than the truth can only raise the science of the best label. Those that
- * can be switched off are measured by the science they cost.
+ * What the bound gives up against the rules, one entry per step of the chain, and why each keeps it
+ * valid: an answer that is more favourable than the truth can only raise the science of the best
+ * label. Those that can be switched off are measured by the science they cost.
  */
 enum Relaxation {
   POOLED_STORES(
@@ -19,7 +19,8 @@ enum Relaxation {
           + " switching time, handover and rate steps are dropped; at every instant the best antennas are"
           + " in use."),
   CONFIRMED_LOOSE(
-      false, "A confirmed contact holds its craft's beam in its cells, but takes no antenna from the others; what is frozen binds nothing."),
+      false,
+      "A confirmed contact holds its craft's beam in its cells, but takes no antenna from the others; what is frozen binds nothing."),
   TRAVEL_AND_SPACING(
       false,
       "Steps of the aim are dropped, limits of its travel widened by one cone; the spacing of repoints is"
@@ -40,8 +41,7 @@ enum Relaxation {
       true,
       "A pause that starts in a cell leaves the whole cell to the old aims, and the new aims begin with"
           + " the first cell they could reach from its begin."),
-  PAUSE_SAVES(
-      true, "Data are made at the pause rate in every cell that the pause may touch."),
+  PAUSE_SAVES(true, "Data are made at the pause rate in every cell that the pause may touch."),
   JOINED_PAUSES(
       true,
       "A repoint that may belong to the pause of an interruption costs only what sticks out of it, and no"
@@ -73,7 +73,10 @@ enum Relaxation {
     return EnumSet.allOf(Relaxation.class);
   }
 
-  /** What remains when everything that can be judged closely is: a base for skeletons, not for bounds. */
+  /**
+   * What remains when everything that can be judged closely is: a base for skeletons, not for
+   * bounds.
+   */
   static Set<Relaxation> unavoidable() {
     EnumSet<Relaxation> left = EnumSet.allOf(Relaxation.class);
     left.removeIf(Relaxation::switchable);

@@ -8,9 +8,9 @@ import quietspan.model.RuleId;
 import quietspan.model.Waiver;
 
 /**
- * The contacts of a plan in the making, kept together with the ledger of the stores. Contacts in it keep
- * every rule of the first table when they are put in through {@link #fits}; what the data rules say is asked
- * with {@link #shortfall}.
+ * The contacts of a plan in the making, kept together with the ledger of the stores. Contacts in it
+ * keep every rule of the first table when they are put in through {@link #fits}; what the data
+ * rules say is asked with {@link #shortfall}.
  */
 final class Roster {
 
@@ -87,12 +87,7 @@ final class Roster {
     int begin = tables.onboardCeil(use.craft(), use.begin());
     int end = tables.onboardFloor(use.craft(), use.end());
     ledger.contact(
-        use.craft(),
-        begin,
-        end,
-        begin + lockUp,
-        tables.effective[use.craft()][use.step()],
-        sign);
+        use.craft(), begin, end, begin + lockUp, tables.effective[use.craft()][use.step()], sign);
   }
 
   /** Whether a contact goes beside those already there: antenna, number at once, switching. */
@@ -160,8 +155,7 @@ final class Roster {
       last = Math.max(last, use.end());
     }
     int reference = Math.max(0, craft);
-    return over
-        + over(last, tables.groundCeil(reference, tables.length), limit, rule, craft);
+    return over + over(last, tables.groundCeil(reference, tables.length), limit, rule, craft);
   }
 
   private long over(int from, int to, int limit, RuleId rule, int craft) {
@@ -170,8 +164,7 @@ final class Roster {
     }
     int allowed = limit;
     for (Waiver waiver : waivers) {
-      boolean mine =
-          craft < 0 || waiver.craft().equals(tables.scenario.craft().get(craft).name());
+      boolean mine = craft < 0 || waiver.craft().equals(tables.scenario.craft().get(craft).name());
       if (waiver.rule() == rule
           && mine
           && waiver.begin().getEpochSecond() - tables.epoch < to

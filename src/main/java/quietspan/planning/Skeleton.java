@@ -35,8 +35,7 @@ final class Skeleton {
     return moves;
   }
 
-  private int opening(
-      Programme.Solution solution, int craft, int pauseCell, int from, int until) {
+  private int opening(Programme.Solution solution, int craft, int pauseCell, int from, int until) {
     for (Programme.Opening opening : solution.openings()) {
       if (opening.craft() == craft
           && opening.cell() > pauseCell

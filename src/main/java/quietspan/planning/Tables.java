@@ -18,10 +18,10 @@ import quietspan.time.OnboardInstant;
 import quietspan.units.DataRate;
 
 /**
- * The sampled geometry of a scenario in the planner's own numbers. Craft, antennas (every dish of every
- * station, in file order) and samples are indices; instants are seconds since the begin of the period on
- * board. Samples are {@link #STEP} apart on board and run past the end of the period as far as the end
- * coverage needs and the ephemeris reaches.
+ * The sampled geometry of a scenario in the planner's own numbers. Craft, antennas (every dish of
+ * every station, in file order) and samples are indices; instants are seconds since the begin of
+ * the period on board. Samples are {@link #STEP} apart on board and run past the end of the period
+ * as far as the end coverage needs and the ephemeris reaches.
  */
 final class Tables {
 
@@ -55,7 +55,10 @@ final class Tables {
   /** One-way light time at a sample (s), {@code [craft][sample]}. */
   final double[][] lightTime;
 
-  /** Earth in the body frame (rad), {@code [craft][sample]}; azimuth continuous from sample to sample. */
+  /**
+   * Earth in the body frame (rad), {@code [craft][sample]}; azimuth continuous from sample to
+   * sample.
+   */
   final double[][] azimuth;
 
   final double[][] elevation;
@@ -204,7 +207,8 @@ final class Tables {
   double lightAt(int craft, int second) {
     int sample = Math.max(0, Math.min(samples - 2, second / STEP));
     double part = (second - (double) sample * STEP) / STEP;
-    return lightTime[craft][sample] + part * (lightTime[craft][sample + 1] - lightTime[craft][sample]);
+    return lightTime[craft][sample]
+        + part * (lightTime[craft][sample + 1] - lightTime[craft][sample]);
   }
 
   /** First whole ground second at which the wave of this on-board second or a later one arrives. */
@@ -228,7 +232,14 @@ final class Tables {
   static Tables of(Scenario scenario, Geometry geometry) {
     int length = (int) scenario.period().length().toSeconds();
     int after =
-        (int) scenario.rules().data().endCoverage().map(java.time.Duration::toSeconds).orElse(0L).longValue();
+        (int)
+            scenario
+                .rules()
+                .data()
+                .endCoverage()
+                .map(java.time.Duration::toSeconds)
+                .orElse(0L)
+                .longValue();
     int samples = (length + after) / STEP + 2;
     Tables tables = new Tables(scenario, geometry, samples);
     for (int c = 0; c < tables.craftCount; c++) {
@@ -248,7 +259,9 @@ final class Tables {
     for (int i = 0; i < samples; i++) {
       OnboardInstant sent = OnboardInstant.ofEpochSecond(epoch + (long) i * STEP);
       GroundInstant received = kept;
-      if (kept == null || i * (long) STEP <= length || sent.utc().isBefore(last.utc().minusSeconds(4000))) {
+      if (kept == null
+          || i * (long) STEP <= length
+          || sent.utc().isBefore(last.utc().minusSeconds(4000))) {
         received = sky.ground(craft.name(), sent);
         kept = received;
       }
@@ -303,8 +316,7 @@ final class Tables {
   private long effective(DataRate rate) {
     return rate.share(
             java.math.BigDecimal.ONE
-                .subtract(
-                    java.math.BigDecimal.valueOf(scenario.rules().contacts().overheadShare()))
+                .subtract(java.math.BigDecimal.valueOf(scenario.rules().contacts().overheadShare()))
                 .doubleValue())
         .share(scenario.rules().margins().usableVolumeShare())
         .bitsPerSecond();
@@ -373,8 +385,9 @@ final class Tables {
   }
 
   /**
-   * Highest step of the ladder that closes throughout a contact under the holds of a draft, whatever step it
-   * states; -1 when none does or the craft is moving or the Earth outside its cone.
+   * Highest step of the ladder that closes throughout a contact under the holds of a draft,
+   * whatever step it states; -1 when none does or the craft is moving or the Earth outside its
+   * cone.
    */
   int rateStep(Draft draft, Use use) {
     int begin = onboardFloor(use.craft(), use.begin());
@@ -409,7 +422,10 @@ final class Tables {
     return step;
   }
 
-  /** Between samples, link and off-pointing lie on the better side of the chord, so the chord is safe. */
+  /**
+   * Between samples, link and off-pointing lie on the better side of the chord, so the chord is
+   * safe.
+   */
   private int stepAt(Hold hold, float[] row, int second) {
     int i = Math.min(samples - 2, second / STEP);
     double part = (second - (double) i * STEP) / STEP;

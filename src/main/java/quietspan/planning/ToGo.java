@@ -3,9 +3,10 @@ package quietspan.planning;
 import java.util.Arrays;
 
 /**
- * A lower bound on what is still to come, whatever the label: it takes all aims as free and all stores as
- * empty, and every pause as the shortest one that renews everything. Computed on a coarse optimistic grid;
- * it lets {@link Programme} drop labels that cannot end below a given loss any more.
+ * A lower bound on what is still to come, whatever the label: it takes all aims as free and all
+ * stores as empty, and every pause as the shortest one that renews everything. Computed on a coarse
+ * optimistic grid; it lets {@link Programme} drop labels that cannot end below a given loss any
+ * more.
  */
 final class ToGo {
 
@@ -49,7 +50,8 @@ final class ToGo {
       }
     }
     int h = cells.end(0);
-    Programme programme = new Programme(cells, aim, false, nothing(), Long.MAX_VALUE / 4, Long.MAX_VALUE);
+    Programme programme =
+        new Programme(cells, aim, false, nothing(), Long.MAX_VALUE / 4, Long.MAX_VALUE);
     int saving = (cells.longestRepoint() + h - 1) / h + 1;
     boolean losing = aim == Programme.Aim.LOSS;
     long[] fresh = new long[n + 2];
@@ -77,9 +79,7 @@ final class ToGo {
               break;
             }
             long cost =
-                losing
-                    ? Math.max(length, (long) Math.max(0, more - 1) * h) + cells.warmUp()
-                    : 1;
+                losing ? Math.max(length, (long) Math.max(0, more - 1) * h) + cells.warmUp() : 1;
             if (option.merges() && losing) {
               cost -= cells.warmUp();
             }

@@ -3,7 +3,8 @@ package quietspan.planning;
 /**
  * A contact in the planner's numbers.
  *
- * @param begin ground receive time, seconds since the instant that the period's begin reads on board
+ * @param begin ground receive time, seconds since the instant that the period's begin reads on
+ *     board
  * @param end as begin, exclusive
  * @param step of the craft's ladder
  */
