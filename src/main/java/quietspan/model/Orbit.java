@@ -28,8 +28,8 @@ public sealed interface Orbit {
    *
    * @param epochTdb instant at which {@code lead} and {@code phase} hold, read as TDB
    * @param arm length of a side
-   * @param lead heliocentric ecliptic longitude of the triangle's centre minus that of the Earth;
-   *     negative when the formation trails
+   * @param lead heliocentric ecliptic longitude of the triangle's centre minus the mean longitude
+   *     of the Earth; negative when the formation trails
    * @param phase turns the triangle in its plane: node of the first craft at the epoch, from the
    *     direction of the centre
    * @param secondOrderTilt tilt 60 deg + 5 alpha / 8 instead of 60 deg
