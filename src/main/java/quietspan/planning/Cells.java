@@ -94,6 +94,7 @@ final class Cells {
   private final int[] levelLengths;
   private final int[] levelOfMask;
   private final boolean movesOnce;
+  private final int longestStopCells;
   private final PauseOption[][] pauses;
   private final List<List<Stop>> stops;
   private final int[][] atLeast;
@@ -187,11 +188,19 @@ final class Cells {
     for (int c = 0; c < craftCount; c++) {
       together += repointLength(c);
     }
-    for (List<Stop> list : stops) {
-      for (Stop stop : list) {
-        together += stop.length();
-      }
+    // A pause may run on through an interruption, of two only where they lie close together.
+    int longestStop = 0;
+    int allStops = 0;
+    boolean close = false;
+    int last = Integer.MIN_VALUE / 2;
+    for (int[] stop : tables.stops) {
+      longestStop = Math.max(longestStop, stop[1] - stop[0]);
+      allStops += stop[1] - stop[0];
+      close |= stop[0] - last <= together;
+      last = stop[1];
     }
+    together += close ? allStops : longestStop;
+    this.longestStopCells = longestStop / cellLength + 1;
     int allRepoints = together;
     this.movesOnce =
         scenario.craft().stream()
@@ -366,6 +375,33 @@ final class Cells {
 
   List<Stop> stopsFrom(int cell) {
     return stops.get(cell);
+  }
+
+  /** What interruptions that begin in a cell cost on their own: their length, and a warm-up after each. */
+  long stopsLoss(int cell) {
+    long loss = 0;
+    for (Stop stop : stops.get(cell)) {
+      loss += stop.length() + (stop.closeToPrevious() ? 0 : warmUp);
+    }
+    return loss;
+  }
+
+  /** The same for all interruptions that begin in a cell or later; zero unless asked for. */
+  long stopsFromOn(int cell, boolean asked) {
+    long loss = 0;
+    for (int i = cell; asked && i < count; i++) {
+      loss += stopsLoss(i);
+    }
+    return loss;
+  }
+
+  /** Seconds of interruptions that begin in [from, to), warm-ups included. */
+  long stopsWithin(int from, int to) {
+    long seconds = 0;
+    for (int i = Math.max(0, from - longestStopCells); i < Math.min(count, to); i++) {
+      seconds += stopsLoss(i);
+    }
+    return seconds;
   }
 
   /** First cell in which a craft that moves in a pause from a cell may serve again. */

@@ -62,6 +62,9 @@ final class Programme {
   /** Labels after which the search is given up. */
   private final long work;
 
+  /** Labels kept at one instant for each number of pauses paid for; all of them for a bound. */
+  private final int width;
+
   private long labelsKept;
   private boolean gaveUp;
 
@@ -69,8 +72,20 @@ final class Programme {
   private final ToGo toGo;
 
   Programme(Cells cells, Aim aim, boolean keepParents, ToGo toGo, long cutoff, long work) {
+    this(cells, aim, keepParents, toGo, cutoff, work, Integer.MAX_VALUE);
+  }
+
+  Programme(
+      Cells cells,
+      Aim aim,
+      boolean keepParents,
+      ToGo toGo,
+      long cutoff,
+      long work,
+      int width) {
     this.toGo = toGo;
     this.work = work;
+    this.width = width;
     this.cells = cells;
     this.aim = aim;
     this.keepParents = keepParents;
@@ -482,7 +497,13 @@ final class Programme {
       kept.add(null);
     }
     List<Label> result = new ArrayList<>();
+    int[] perPauses = new int[64];
+    long onePause = aim == Aim.LOSS ? (long) cells.longestRepoint() + cells.warmUp() + 1 : 1;
     for (Label label : labels) {
+      int paid = (int) Math.max(0, Math.min(63, (label.loss - labels.get(0).loss) / onePause));
+      if (perPauses[paid] >= width) {
+        continue;
+      }
       int pattern = pattern(label);
       boolean beaten = false;
       for (int better : cells.patternsAtLeast(pattern)) {
@@ -498,6 +519,7 @@ final class Programme {
         }
         kept.get(pattern).add(label);
         result.add(label);
+        perPauses[paid]++;
       }
     }
     return result;

@@ -2,12 +2,12 @@ package quietspan.planning;
 
 import java.util.ArrayList;
 import java.util.List;
+import quietspan.link.Link;
 import quietspan.model.BodyDirection;
 import quietspan.model.Craft;
 import quietspan.model.Dish;
 import quietspan.model.Geometry;
 import quietspan.model.Interruption;
-import quietspan.model.LinkBudget;
 import quietspan.model.Look;
 import quietspan.model.RateLadder;
 import quietspan.model.Scenario;
@@ -28,6 +28,9 @@ final class Tables {
   /** Seconds between samples; the Earth moves 0.0035 deg through the body frame meanwhile. */
   static final int STEP = 300;
 
+  /** Stands for an infinite level (dB Hz), so that interpolation stays finite. */
+  private static final double FAR = 1e6;
+
   /** One antenna of one station. */
   record Antenna(int index, Station station, Dish dish) {
 
@@ -37,6 +40,14 @@ final class Tables {
 
     int busyAfter() {
       return (int) dish.teardown().toSeconds();
+    }
+
+    int shortest() {
+      return (int) dish.minimumContact().toSeconds();
+    }
+
+    int longest() {
+      return (int) dish.maximumContact().toSeconds();
     }
 
     int changeover() {
@@ -69,10 +80,11 @@ final class Tables {
   /** Carrier to noise density on the beam's axis (dB Hz), {@code [craft][antenna][sample]}. */
   final float[][][] centre;
 
-  /** Ladder of each craft, rising (bit/s), and what each rate needs (dB Hz). */
+  /** Ladder of each craft, rising (bit/s). */
   final long[][] ladder;
 
-  final double[][] need;
+  /** Any link of each craft: what an antenna contributes is in {@link #centre} already. */
+  private final Link[] links;
 
   /** The rates after overhead and usable share (bit/s). */
   final long[][] effective;
@@ -80,8 +92,6 @@ final class Tables {
   /** Usable half-cone (rad). */
   final double[] usable;
 
-  final double[] halfPower;
-  final double allowance;
 
   /** Repoint with settling, spacing and last repoint before the period of each craft (s). */
   final int[] repoint;
@@ -122,11 +132,9 @@ final class Tables {
     this.unit = new double[craftCount][3 * samples];
     this.centre = new float[craftCount][all.size()][samples];
     this.ladder = new long[craftCount][];
-    this.need = new double[craftCount][];
+    this.links = new Link[craftCount];
     this.effective = new long[craftCount][];
     this.usable = new double[craftCount];
-    this.halfPower = new double[craftCount];
-    this.allowance = scenario.rules().margins().pointingAllowance().radians();
     this.repoint = new int[craftCount];
     this.spacing = new int[craftCount];
     this.lastRepoint = new int[craftCount];
@@ -251,8 +259,9 @@ final class Tables {
   private void fill(int c) {
     Craft craft = scenario.craft().get(c);
     usable[c] = scenario.usableHalfCone(craft).radians();
-    halfPower[c] = craft.antenna().halfPowerWidth().radians();
     fillLadder(c, craft);
+    List<Link> links =
+        antennas.stream().map(antenna -> Link.of(scenario, craft, antenna.dish())).toList();
     GroundInstant last = sky.known(craft.name()).end();
     double previous = Double.NaN;
     GroundInstant kept = null;
@@ -279,74 +288,43 @@ final class Tables {
       unit[c][3 * i + 1] = cos * StrictMath.sin(turn);
       unit[c][3 * i + 2] = StrictMath.sin(earth.elevationRadians());
       if (i * (long) STEP <= length + STEP) {
-        fillLinks(c, craft, i, received);
+        fillLinks(c, craft, i, received, links);
       }
     }
   }
 
   private void fillLadder(int c, Craft craft) {
-    RateLadder rates = craft.rates();
-    List<DataRate> ladderRates = new ArrayList<>();
-    if (rates instanceof RateLadder.ByBudget budget) {
-      ladderRates.addAll(budget.rates());
-    } else if (rates instanceof RateLadder.ByOffPointing table) {
-      table.rows().forEach(row -> ladderRates.add(0, row.rate()));
+    List<DataRate> rates = new ArrayList<>();
+    if (craft.rates() instanceof RateLadder.ByBudget budget) {
+      rates.addAll(budget.rates());
+    } else if (craft.rates() instanceof RateLadder.ByOffPointing table) {
+      table.rows().forEach(row -> rates.add(0, row.rate()));
     }
-    int count = ladderRates.size();
-    ladder[c] = new long[count];
-    effective[c] = new long[count];
-    need[c] = new double[count];
-    for (int r = 0; r < count; r++) {
-      ladder[c][r] = ladderRates.get(r).bitsPerSecond();
-      effective[c][r] = effective(ladderRates.get(r));
-      if (rates instanceof RateLadder.ByBudget) {
-        LinkBudget link = scenario.rules().link().orElseThrow();
-        need[c][r] =
-            link.requiredEbN0Db()
-                + link.implementationLossDb()
-                + link.marginDb()
-                + 10 * StrictMath.log10(ladder[c][r]);
-      } else {
-        // A plain table: what falls with off-pointing is the table itself, not a budget.
-        need[c][r] = Double.NaN;
-      }
-    }
+    links[c] = Link.of(scenario, craft, antennas.get(0).dish());
+    ladder[c] = rates.stream().mapToLong(DataRate::bitsPerSecond).toArray();
+    effective[c] =
+        rates.stream()
+            .mapToLong(rate -> Link.effectiveRate(scenario, rate).bitsPerSecond())
+            .toArray();
   }
 
-  private long effective(DataRate rate) {
-    return rate.share(
-            java.math.BigDecimal.ONE
-                .subtract(java.math.BigDecimal.valueOf(scenario.rules().contacts().overheadShare()))
-                .doubleValue())
-        .share(scenario.rules().margins().usableVolumeShare())
-        .bitsPerSecond();
-  }
-
-  private void fillLinks(int c, Craft craft, int i, GroundInstant received) {
+  private void fillLinks(int c, Craft craft, int i, GroundInstant received, List<Link> links) {
     Look look = null;
     for (Antenna antenna : antennas) {
       if (antenna.index() == 0
           || antennas.get(antenna.index() - 1).station() != antenna.station()) {
         look = sky.look(antenna.station().name(), craft.name(), received);
       }
-      centre[c][antenna.index()][i] = (float) centreDb(craft, antenna.dish(), look);
+      centre[c][antenna.index()][i] =
+          (float)
+              Math.max(
+                  -FAR,
+                  Math.min(
+                      FAR,
+                      links
+                          .get(antenna.index())
+                          .centreDbHz(look.elevationRadians(), look.rangeMetres())));
     }
-  }
-
-  private double centreDb(Craft craft, Dish dish, Look look) {
-    if (!(craft.rates() instanceof RateLadder.ByBudget budget) || look.elevationRadians() < 0.01) {
-      return 0;
-    }
-    LinkBudget link = scenario.rules().link().orElseThrow();
-    double gain = dish.gOverT().get(0).dbPerKelvin();
-    return budget.eirpDbw()
-        - (92.4478
-            + 20 * StrictMath.log10(look.rangeMetres() / 1000)
-            + 20 * StrictMath.log10(link.frequencyHz() / 1e9))
-        - dish.zenithAttenuationDb() / StrictMath.sin(look.elevationRadians())
-        - link.otherLossesDb()
-        + gain
-        + 228.5992;
   }
 
   /** Step of the ladder that closes at this axis level (dB Hz) and off-pointing (rad), or -1. */
@@ -354,22 +332,8 @@ final class Tables {
     if (off > usable[craft]) {
       return -1;
     }
-    RateLadder rates = scenario.craft().get(craft).rates();
-    if (rates instanceof RateLadder.ByOffPointing table) {
-      for (int row = 0; row < table.rows().size(); row++) {
-        if (off + allowance <= table.rows().get(row).upTo().radians()) {
-          return ladder[craft].length - 1 - row;
-        }
-      }
-      return -1;
-    }
-    double ratio = (off + allowance) / halfPower[craft];
-    double level = centreDb - 12 * ratio * ratio;
-    int step = ladder[craft].length - 1;
-    while (step >= 0 && need[craft][step] > level) {
-      step--;
-    }
-    return step;
+    long bits = centreDb <= -FAR ? 0 : links[craft].highestBitsPerSecond(centreDb, off);
+    return bits == 0 ? -1 : java.util.Arrays.binarySearch(ladder[craft], bits);
   }
 
   /** Data rate after overhead and usable share (bit/s); zero where no rate closes. */

@@ -55,9 +55,14 @@ final class ToGo {
     int saving = (cells.longestRepoint() + h - 1) / h + 1;
     boolean losing = aim == Programme.Aim.LOSS;
     long[] fresh = new long[n + 2];
+    long given = 0;
     for (int i = n - 1; i >= 0; i--) {
+      // Interruptions cost their length and a warm-up, whatever is planned around them.
+      long here = losing ? cells.stopsLoss(i) : 0;
+      given += here;
       int dead = programme.reach(i, saving);
       if (dead >= n) {
+        fresh[i] = given;
         continue;
       }
       long least = NEVER;
@@ -68,22 +73,22 @@ final class ToGo {
             continue;
           }
           int length = cells.levelLength(level);
-          if (option.merges()) {
-            int after = Math.min(n, Math.max(j + 1, option.joinsUntil() / h + 1));
-            least = Math.min(least, (losing ? option.extra() : 1) + fresh[after]);
-          }
-          // A pause that grows costs its length; what it renews is free from its last repoint on.
+          // A pause that grows costs its length; what it renews is free from its last repoint on. Time of
+          // interruptions inside it is counted with them already.
           for (int more = 0; j + more <= n && more <= 8 * saving; more++) {
             int renewed = Math.max(i + 1, j + more);
             if (renewed > n) {
               break;
             }
-            long cost =
-                losing ? Math.max(length, (long) Math.max(0, more - 1) * h) + cells.warmUp() : 1;
-            if (option.merges() && losing) {
-              cost -= cells.warmUp();
+            long cost = 1;
+            if (losing && option.merges()) {
+              cost = Math.max(option.extra(), (long) renewed * h - option.joinsUntil());
+            } else if (losing) {
+              long grown = (long) Math.max(0, more - 1) * h - cells.stopsWithin(j, j + more + 1);
+              cost = Math.max(length, grown) + cells.warmUp();
             }
-            least = Math.min(least, cost + fresh[renewed]);
+            long passed = given - cells.stopsFromOn(renewed, losing);
+            least = Math.min(least, cost + passed + fresh[renewed]);
           }
         }
       }
@@ -92,8 +97,14 @@ final class ToGo {
     long[] growing = fresh.clone();
     for (int i = 0; i <= n; i++) {
       for (int more = 0; i + more <= n && more <= 8 * saving; more++) {
+        // Interruptions on the way may lie inside the pause: only what comes after counts.
         growing[i] =
-            Math.min(growing[i], fresh[i + more] + (losing ? (long) Math.max(0, more - 1) * h : 0));
+            Math.min(
+                growing[i],
+                fresh[i + more]
+                    + (losing
+                        ? Math.max(0, (long) Math.max(0, more - 1) * h - cells.stopsWithin(i, i + more + 1))
+                        : 0));
       }
     }
     Arrays.fill(fresh, n, n + 2, 0);

@@ -1,0 +1,231 @@
+package quietspan.planning;
+
+import java.util.ArrayList;
+import java.util.EnumSet;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.concurrent.CompletableFuture;
+import java.util.concurrent.atomic.AtomicBoolean;
+import quietspan.model.Bound;
+import quietspan.model.ConfirmedContact;
+import quietspan.model.Contact;
+import quietspan.model.Decisions;
+import quietspan.model.Geometry;
+import quietspan.model.Outcome;
+import quietspan.model.RateStep;
+import quietspan.model.Repoint;
+import quietspan.model.Scenario;
+import quietspan.model.Waiver;
+import quietspan.planning.simulation.Simulation;
+import quietspan.rules.Opportunities;
+import quietspan.rules.Opportunity;
+import quietspan.time.GroundInstant;
+import quietspan.time.Interval;
+import quietspan.time.OnboardInstant;
+import quietspan.units.DataRate;
+
+/**
+ * Plans a scenario: a skeleton of pauses and beams by dynamic programming, a legal seed of contacts in it, a
+ * joint polish, and a bound that says how far any plan can be from this one. A pure function of its arguments,
+ * however many processors there are.
+ */
+public final class Planner {
+
+  /**
+   * How hard to try.
+   *
+   * @param seed of the polish
+   * @param effort steps of the polish; 0 for none
+   * @param boundWork labels the bound may use
+   */
+  public record Options(long seed, long effort, long boundWork) {
+    public static final Options DEFAULT = new Options(1, 3_000, 4_000_000);
+  }
+
+  /** Told what is going on; never changes what comes out. */
+  public interface Progress {
+    void stage(String what);
+  }
+
+  /**
+   * What came out.
+   *
+   * @param stepsDone steps of the polish that led to these decisions
+   * @param interrupted the polish was stopped from outside
+   */
+  public record Result(
+      Decisions decisions, Outcome outcome, Bound bound, long stepsDone, boolean interrupted) {}
+
+  private final Scenario scenario;
+  private final Geometry geometry;
+  private final List<Waiver> waivers;
+  private final Options options;
+  private final Progress progress;
+  private final AtomicBoolean stop;
+  private final Tables tables;
+  private final Links links;
+
+  private Planner(
+      Scenario scenario,
+      Geometry geometry,
+      List<Waiver> waivers,
+      List<Opportunity> opportunities,
+      Options options,
+      Progress progress,
+      AtomicBoolean stop) {
+    this.scenario = scenario;
+    this.geometry = geometry;
+    this.waivers = waivers;
+    this.options = options;
+    this.progress = progress;
+    this.stop = stop;
+    this.tables = Tables.of(scenario, geometry);
+    this.links = links(opportunities);
+  }
+
+  /**
+   * @param stop set from outside, ends the polish with what it has
+   */
+  public static Result plan(
+      Scenario scenario,
+      Geometry geometry,
+      List<Waiver> waivers,
+      Options options,
+      Progress progress,
+      AtomicBoolean stop) {
+    List<Opportunity> opportunities = Opportunities.of(scenario, geometry);
+    return new Planner(scenario, geometry, waivers, opportunities, options, progress, stop).run();
+  }
+
+  private Links links(List<Opportunity> opportunities) {
+    List<Links.Window> windows = new ArrayList<>();
+    for (Opportunity one : opportunities) {
+      windows.add(
+          new Links.Window(
+              craft(one.craft()),
+              antenna(one.station(), one.antenna()),
+              tables.second(one.during().begin().epochSecond()),
+              tables.second(one.during().end().epochSecond())));
+    }
+    List<Links.Window> confirmed = new ArrayList<>();
+    for (ConfirmedContact one : scenario.calendars().confirmed()) {
+      Links.Window window =
+          new Links.Window(
+              craft(one.craft()),
+              antenna(one.station(), one.antenna()),
+              tables.second(one.during().begin().epochSecond()),
+              tables.second(one.during().end().epochSecond()));
+      boolean possible =
+          windows.stream()
+              .anyMatch(
+                  other ->
+                      other.craft() == window.craft()
+                          && other.antenna() == window.antenna()
+                          && other.begin() <= window.begin()
+                          && window.end() <= other.end());
+      if (possible) {
+        confirmed.add(window);
+      }
+    }
+    return new Links(tables, windows, confirmed);
+  }
+
+  private int craft(String name) {
+    for (int c = 0; c < tables.craftCount; c++) {
+      if (scenario.craft().get(c).name().equals(name)) {
+        return c;
+      }
+    }
+    throw new IllegalArgumentException("no craft " + name);
+  }
+
+  private int antenna(String station, String name) {
+    return tables.antennas.stream()
+        .filter(one -> one.station().name().equals(station) && one.dish().name().equals(name))
+        .findFirst()
+        .orElseThrow()
+        .index();
+  }
+
+  private Result run() {
+    progress.stage("bound and skeleton");
+    BoundSearch search = new BoundSearch(tables, links, waivers, Relaxation.all(), options.boundWork());
+    CompletableFuture<Bound> bound =
+        CompletableFuture.supplyAsync(
+            () -> search.bound(Long.MAX_VALUE / 16, Long.MAX_VALUE / 16), Planner::daemon);
+    Seed seed = new Seed(tables, links, waivers, progress);
+    Roster roster = seed.roster();
+    progress.stage("trimming contacts");
+    if (roster.shortfall().none()) {
+      new Trimmer(roster, seed.fixed()).trim();
+    }
+    Decisions decisions = decisions(roster);
+    Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
+    return new Result(decisions, outcome, bound.join(), 0, stop.get());
+  }
+
+  private static void daemon(Runnable task) {
+    Thread thread = new Thread(task, "bound");
+    thread.setDaemon(true);
+    thread.start();
+  }
+
+  // ---------------------------------------------------------------- out of the planner's numbers
+
+  private Decisions decisions(Roster roster) {
+    List<Repoint> repoints = new ArrayList<>();
+    Map<String, Integer> counts = new HashMap<>();
+    for (Move move : roster.draft().moves) {
+      String name = scenario.craft().get(move.craft()).name();
+      int number = counts.merge(name, 1, Integer::sum);
+      repoints.add(
+          new Repoint(
+              "R-" + name.replace(' ', '-') + "-" + number,
+              name,
+              OnboardInstant.ofEpochSecond(tables.epoch + move.start()),
+              move.aim()));
+    }
+    List<Contact> contacts = new ArrayList<>();
+    for (Use use : roster.uses()) {
+      Tables.Antenna antenna = tables.antennas.get(use.antenna());
+      String name = scenario.craft().get(use.craft()).name();
+      GroundInstant begin = GroundInstant.ofEpochSecond(tables.epoch + use.begin());
+      GroundInstant end = GroundInstant.ofEpochSecond(tables.epoch + use.end());
+      Optional<ConfirmedContact> confirmed = confirmed(antenna, name, Interval.of(begin, end));
+      contacts.add(
+          new Contact(
+              confirmed.map(ConfirmedContact::id).orElse("C-" + String.format(java.util.Locale.ROOT, "%04d", contacts.size() + 1)),
+              antenna.station().name(),
+              antenna.dish().name(),
+              name,
+              Interval.of(begin, end),
+              List.of(
+                  new RateStep(begin, new DataRate(tables.ladder[use.craft()][use.step()]))),
+              Set.of(Contact.Service.TELEMETRY),
+              confirmed.isPresent() ? Contact.Status.CONFIRMED : Contact.Status.TENTATIVE));
+    }
+    return new Decisions(repoints, contacts);
+  }
+
+  private Optional<ConfirmedContact> confirmed(
+      Tables.Antenna antenna, String craft, Interval<GroundInstant> during) {
+    return scenario.calendars().confirmed().stream()
+        .filter(
+            one ->
+                one.station().equals(antenna.station().name())
+                    && one.antenna().equals(antenna.dish().name())
+                    && one.craft().equals(craft)
+                    && during.contains(one.during()))
+        .findFirst();
+  }
+
+  /** What skeletons are built with: close to real contacts, but free to place them in a cell. */
+  static Set<Relaxation> forSkeletons() {
+    EnumSet<Relaxation> left = EnumSet.copyOf(Relaxation.unavoidable());
+    left.add(Relaxation.WHOLE_CELLS);
+    return left;
+  }
+}
