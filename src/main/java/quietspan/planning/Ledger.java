@@ -52,6 +52,7 @@ final class Ledger {
   }
 
   private final Tables tables;
+  private final int guard;
   private final int craftCount;
   private final int classCount;
   private final int steps;
@@ -91,8 +92,12 @@ final class Ledger {
   private long late;
   private long fill;
 
-  Ledger(Tables tables, List<Waiver> waivers) {
+  /**
+   * @param guard seconds by which data must be younger than their limit
+   */
+  Ledger(Tables tables, List<Waiver> waivers, int guard) {
     this.tables = tables;
+    this.guard = guard;
     Scenario scenario = tables.scenario;
     this.craftCount = tables.craftCount;
     List<DataClass> classes = scenario.rules().classes();
@@ -171,7 +176,7 @@ final class Ledger {
       for (int c = 0; c < craftCount; c++) {
         light = Math.max(light, tables.lightTime[c][sample]);
       }
-      ageLimit[k][bin] = (int) ((allowed - delivery - (long) Math.ceil(light) - 2) / DT);
+      ageLimit[k][bin] = (int) ((allowed - delivery - (long) Math.ceil(light) - 2 - guard) / DT);
     }
   }
 
@@ -266,7 +271,7 @@ final class Ledger {
     for (int c = 0; c < craftCount; c++) {
       for (int k = 0; k < classCount; k++) {
         for (int bin = head[c][k]; bin < steps + older; bin++) {
-          if (steps + older - bin > ageLimit[k][bin] + ground(k)) {
+          if (steps + older - bin > ageLimit[k][bin]) {
             aboard += bins[c][k][bin];
           } else {
             break;
@@ -275,13 +280,6 @@ final class Ledger {
       }
     }
     return new Score(lost, late + aboard, fill, over);
-  }
-
-  /**
-   * What aboard at the end may exceed the delivery limits by: light time and delivery do not count.
-   */
-  private int ground(int k) {
-    return 0;
   }
 
   private long fillOf(int c) {

@@ -42,7 +42,7 @@ public final class Planner {
    * @param boundWork labels the bound may use
    */
   public record Options(long seed, long effort, long boundWork) {
-    public static final Options DEFAULT = new Options(1, 3_000, 4_000_000);
+    public static final Options DEFAULT = new Options(1, 3_000, 600_000);
   }
 
   /** Told what is going on; never changes what comes out. */
@@ -158,12 +158,27 @@ public final class Planner {
             () -> search.bound(Long.MAX_VALUE / 16, Long.MAX_VALUE / 16), Planner::daemon);
     Seed seed = new Seed(tables, links, waivers, progress);
     Roster roster = seed.roster();
-    progress.stage("trimming contacts");
-    if (roster.shortfall().none()) {
-      new Trimmer(roster, seed.fixed()).trim();
+    progress.stage("contacts");
+    Decisions decisions = null;
+    Outcome outcome = null;
+    int guard = Seed.FIRST_GUARD;
+    for (int i = 0; i < 4; i++) {
+      if (roster.shortfall().none()) {
+        new Trimmer(roster, seed.fixed()).trim();
+      }
+      Decisions tried = decisions(roster);
+      Outcome played = Simulation.simulate(scenario, geometry.sightLines(), tried, waivers);
+      if (outcome == null || played.findings().size() < outcome.findings().size()) {
+        decisions = tried;
+        outcome = played;
+      }
+      if (outcome.findings().isEmpty() || stop.get()) {
+        break;
+      }
+      // The ledger's ten minutes were too coarse somewhere: again with more room.
+      guard += 1200;
+      roster = seed.refilled(roster.draft(), guard);
     }
-    Decisions decisions = decisions(roster);
-    Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
     return new Result(decisions, outcome, bound.join(), 0, stop.get());
   }
 

@@ -44,10 +44,10 @@ final class Roster {
     }
   }
 
-  Roster(Tables tables, List<Waiver> waivers, Draft draft) {
+  Roster(Tables tables, List<Waiver> waivers, Draft draft, int guard) {
     this.tables = tables;
     this.waivers = waivers;
-    this.ledger = new Ledger(tables, waivers);
+    this.ledger = new Ledger(tables, waivers, guard);
     var rules = tables.scenario.rules();
     this.gapLimit = rules.data().gapLimit().map(limit -> (int) limit.toSeconds()).orElse(-1);
     this.directLimit = rules.data().directLimit().map(limit -> (int) limit.toSeconds()).orElse(-1);

@@ -22,7 +22,10 @@ final class Seed {
           new Cells.Shade(0.8, 2 * 3600, 0.8, 0.9),
           new Cells.Shade(0.7, 4 * 3600, 0.65, 0.8));
 
-  private static final int WIDTH = Integer.getInteger("width", 250);
+  private static final int WIDTH = 120;
+
+  /** Seconds by which the ledger is stricter than the rules, to begin with. */
+  static final int FIRST_GUARD = 600;
 
   private final Tables tables;
   private final Links links;
@@ -50,6 +53,11 @@ final class Seed {
     return set;
   }
 
+  /** The same pauses with every contact that fits, under a stricter ledger. */
+  Roster refilled(Draft draft, int guard) {
+    return fill(draft, guard);
+  }
+
   Roster roster() {
     Roster best = null;
     List<Use> bestFixed = List.of();
@@ -64,7 +72,7 @@ final class Seed {
         if (draft.isEmpty()) {
           continue;
         }
-        Roster roster = fill(draft.get());
+        Roster roster = fill(draft.get(), FIRST_GUARD);
         boolean better =
             best == null
                 || rank(roster) < rank(best)
@@ -80,7 +88,7 @@ final class Seed {
       }
     }
     if (best == null) {
-      best = fill(new Draft(tables, List.of()));
+      best = fill(new Draft(tables, List.of()), FIRST_GUARD);
       bestFixed = List.copyOf(fixed);
     }
     fixed.clear();
@@ -94,7 +102,7 @@ final class Seed {
 
   private List<Integer> grids(int coarse) {
     List<Integer> grids = new ArrayList<>();
-    for (int grid : new int[] {3 * 3600, 2 * 3600}) {
+    for (int grid : new int[] {3 * 3600}) {
       if (grid < coarse) {
         grids.add(grid);
       }
@@ -122,8 +130,8 @@ final class Seed {
     return solution.map(found -> new Draft(tables, new Skeleton(tables, cells).moves(found)));
   }
 
-  private Roster fill(Draft draft) {
-    Roster roster = new Roster(tables, waivers, draft);
+  private Roster fill(Draft draft, int guard) {
+    Roster roster = new Roster(tables, waivers, draft, guard);
     fixed.clear();
     for (Links.Window window : links.confirmed) {
       Use use = new Use(window.craft(), window.antenna(), window.begin(), window.end(), 0);
