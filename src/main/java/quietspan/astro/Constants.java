@@ -30,9 +30,9 @@ final class Constants {
   };
 
   /**
-   * Dynamical ecliptic and equinox J2000 of VSOP87 to the FK5, by rows, which is the ICRF to some 20
-   * milliarcseconds: Bretagnon and Francou 1988, as given in Meeus, Astronomical Algorithms, 2nd ed. 1998,
-   * chapter 26.
+   * Dynamical ecliptic and equinox J2000 of VSOP87 to the FK5, by rows, which is the ICRF to some
+   * 20 milliarcseconds: Bretagnon and Francou 1988, as given in Meeus, Astronomical Algorithms, 2nd
+   * ed. 1998, chapter 26.
    */
   static final double[][] VSOP_TO_FK5 = {
     {1, 4.40360e-7, -1.90919e-7},

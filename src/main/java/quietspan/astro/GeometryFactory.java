@@ -26,6 +26,8 @@ public final class GeometryFactory {
   private GeometryFactory() {}
 
   /**
+   * The geometry of a scenario over its period.
+   *
    * @param folder the scenario folder, to which ephemeris files are relative
    * @param orekitData a folder or zip with Orekit data, put in front of what is built in
    * @throws quietspan.problem.InputException when an ephemeris or the data cannot be used

@@ -32,7 +32,19 @@ final class Sky implements SightLines {
   private final Map<String, Interval<GroundInstant>> known = new HashMap<>();
 
   /** A station in ITRF axes with its local triad. */
-  private record Site(double[] place, double[] east, double[] north, double[] up) {}
+  private static final class Site {
+    private final double[] place;
+    private final double[] east;
+    private final double[] north;
+    private final double[] up;
+
+    Site(double[] place, double[] east, double[] north, double[] up) {
+      this.place = place;
+      this.east = east;
+      this.north = north;
+      this.up = up;
+    }
+  }
 
   Sky(
       TimeScales scales,
@@ -176,10 +188,7 @@ final class Sky implements SightLines {
     for (int k = 0; k < 3; k++) {
       // ITRF to ICRF: the transposed matrix.
       place[k] =
-          centre[k]
-              + m[k] * site.place()[0]
-              + m[3 + k] * site.place()[1]
-              + m[6 + k] * site.place()[2];
+          centre[k] + m[k] * site.place[0] + m[3 + k] * site.place[1] + m[6 + k] * site.place[2];
     }
     double[] from = new double[3];
     double light = light(c, tt, place, from);
@@ -191,9 +200,9 @@ final class Sky implements SightLines {
     for (int k = 0; k < 3; k++) {
       local[k] = m[3 * k] * line[0] + m[3 * k + 1] * line[1] + m[3 * k + 2] * line[2];
     }
-    double e = dot(site.east(), local);
-    double n = dot(site.north(), local);
-    double u = dot(site.up(), local);
+    double e = dot(site.east, local);
+    double n = dot(site.north, local);
+    double u = dot(site.up, local);
     double azimuth = FastMath.atan2(e, n);
     return new Look(
         azimuth < 0 ? azimuth + 2 * FastMath.PI : azimuth,

@@ -45,7 +45,17 @@ final class Vsop {
   private static final double MILLENNIUM = 365_250 * 86_400.0;
 
   /** Terms a, b, c in a row, by power of time. */
-  private record Series(double[][] byPower) {}
+  private static final class Series {
+    private final double[][] byPower;
+
+    Series(double[][] byPower) {
+      this.byPower = byPower;
+    }
+
+    double[][] byPower() {
+      return byPower;
+    }
+  }
 
   private final Map<Planet, Series[]> series;
 

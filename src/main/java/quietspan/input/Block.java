@@ -76,7 +76,8 @@ final class Block implements Kind<Values> {
   @Override
   public Optional<Values> read(Spot spot) {
     if (!(spot.node() instanceof MappingNode mapping) || !spot.node().getTag().equals(Tag.MAP)) {
-      spot.refuse("is " + YamlFile.shape(spot.node()) + " where " + noun + " is due", keysInWords());
+      spot.refuse(
+          "is " + YamlFile.shape(spot.node()) + " where " + noun + " is due", keysInWords());
       return Optional.empty();
     }
     Map<String, Node> given = new LinkedHashMap<>();
@@ -111,7 +112,8 @@ final class Block implements Kind<Values> {
     Spot at = spot.child(keyNode, join(spot.path(), shown(key)));
     List<String> known = fields.stream().map(Field::key).toList();
     if (!known.contains(key)) {
-      at.refuse("is not known here" + Nearest.hint(key, known), "one of " + String.join(", ", known));
+      at.refuse(
+          "is not known here" + Nearest.hint(key, known), "one of " + String.join(", ", known));
     } else if (given.putIfAbsent(key, tuple.getValueNode()) != null) {
       at.refuse("stands here a second time", "each key once");
     }
@@ -139,7 +141,10 @@ final class Block implements Kind<Values> {
     return field
         .standard()
         .flatMap(
-            text -> field.kind().read(new Spot(YamlFile.parsed(text), spot.place(), path, spot.source())))
+            text ->
+                field
+                    .kind()
+                    .read(new Spot(YamlFile.parsed(text), spot.place(), path, spot.source())))
         .map(value -> new Located<>(value, spot.place(), path, spot.source()));
   }
 
@@ -174,8 +179,7 @@ final class Block implements Kind<Values> {
   }
 
   private static String description(Field<?> field) {
-    return field.sentence()
-        + field.standard().map(text -> " Default: " + text + ".").orElse("");
+    return field.sentence() + field.standard().map(text -> " Default: " + text + ".").orElse("");
   }
 
   private static Map<String, Object> schema(Choice choice) {

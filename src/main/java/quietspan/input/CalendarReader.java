@@ -27,8 +27,8 @@ import net.fortuna.ical4j.model.TemporalAmountAdapter;
 import net.fortuna.ical4j.model.component.VTimeZone;
 
 /**
- * Turns a calendar file into occurrences in UTC. What it does not understand it refuses with the line it
- * stands on; where it makes a choice it says so in a warning.
+ * Turns a calendar file into occurrences in UTC. What it does not understand it refuses with the
+ * line it stands on; where it makes a choice it says so in a warning.
  */
 final class CalendarReader {
 
@@ -71,8 +71,7 @@ final class CalendarReader {
       switch (part.name()) {
         case "VTIMEZONE" -> {}
         case "VEVENT" -> event(part).ifPresent(written::add);
-        default ->
-            refuse(part.line(), part.name() + " is not read here", "events: BEGIN:VEVENT");
+        default -> refuse(part.line(), part.name() + " is not read here", "events: BEGIN:VEVENT");
       }
     }
     return occurrences(written);
@@ -131,11 +130,15 @@ final class CalendarReader {
         throw new Refusal("the event has several RRULE", "one at most");
       }
       String status = part.first("STATUS").map(CalendarLine::value).orElse("");
-      if (status.toUpperCase(Locale.ROOT).equals("CANCELLED") && part.first("RECURRENCE-ID").isEmpty()) {
+      if (status.toUpperCase(Locale.ROOT).equals("CANCELLED")
+          && part.first("RECURRENCE-ID").isEmpty()) {
         remark(part.line(), "event " + Refusal.quoted(uid) + " is CANCELLED and counts nothing");
         return Optional.empty();
       }
-      if (part.first("TRANSP").map(CalendarLine::value).orElse("").equalsIgnoreCase("TRANSPARENT")) {
+      if (part.first("TRANSP")
+          .map(CalendarLine::value)
+          .orElse("")
+          .equalsIgnoreCase("TRANSPARENT")) {
         remark(
             part.line(),
             "event " + Refusal.quoted(uid) + " is TRANSPARENT; it counts all the same");
@@ -192,8 +195,11 @@ final class CalendarReader {
       try {
         TemporalAmount length =
             TemporalAmountAdapter.parse(duration.orElseThrow().value().strip()).getDuration();
-        if (length instanceof Period period && (period.isNegative() || period.isZero())
-            || length instanceof Duration exact && (exact.isNegative() || exact.isZero())) {
+        boolean never =
+            length instanceof Period period
+                ? period.isNegative() || period.isZero()
+                : ((Duration) length).isNegative() || ((Duration) length).isZero();
+        if (never) {
           throw new Refusal("the DURATION is not positive", "such as PT3H");
         }
         return length;
@@ -245,8 +251,7 @@ final class CalendarReader {
                   if (!masters.containsKey(uid)) {
                     remark(other.part().line(), "the event it belongs to is not in this file");
                   }
-                  String status =
-                      other.part().first("STATUS").map(CalendarLine::value).orElse("");
+                  String status = other.part().first("STATUS").map(CalendarLine::value).orElse("");
                   if (!status.equalsIgnoreCase("CANCELLED")) {
                     add(found, other, other.start(), true);
                   }
@@ -304,18 +309,14 @@ final class CalendarReader {
     if (parts.containsKey("UNTIL")) {
       // UNTIL is an instant, or digits of the same kind as DTSTART.
       String until = parts.remove("UNTIL");
-      CalendarStamp stop =
-          CalendarStamp.parse(
-              until,
-              start.date(),
-              "",
-              zones);
+      CalendarStamp stop = CalendarStamp.parse(until, start.date(), "", zones);
       Instant inclusive = stop.instant().plusSeconds(start.date() ? 86_400 : 1);
       last = inclusive.isBefore(last) ? inclusive : last;
     }
     String rule =
         String.join(
-            ";", parts.entrySet().stream().map(one -> one.getKey() + "=" + one.getValue()).toList());
+            ";",
+            parts.entrySet().stream().map(one -> one.getKey() + "=" + one.getValue()).toList());
     try {
       // Two days more on each side than any zone shifts an instant.
       LocalDateTime end = CalendarStamp.utc(last).plusDays(2);
@@ -325,8 +326,7 @@ final class CalendarReader {
       Instant stop = last;
       return dates.stream().filter(date -> start.at(date).instant().isBefore(stop)).toList();
     } catch (DateTimeException | IllegalArgumentException bad) {
-      throw new Refusal(
-          Refusal.quoted(line.value()) + " cannot be understood", "RFC 5545, 3.3.10");
+      throw new Refusal(Refusal.quoted(line.value()) + " cannot be understood", "RFC 5545, 3.3.10");
     }
   }
 

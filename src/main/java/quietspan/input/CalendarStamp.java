@@ -23,7 +23,8 @@ record CalendarStamp(LocalDateTime local, boolean date, CalendarZone zone) {
   private static final DateTimeFormatter DATE_TIME = formatter("uuuuMMdd'T'HHmmss");
 
   private static DateTimeFormatter formatter(String pattern) {
-    return DateTimeFormatter.ofPattern(pattern, Locale.ROOT).withResolverStyle(ResolverStyle.STRICT);
+    return DateTimeFormatter.ofPattern(pattern, Locale.ROOT)
+        .withResolverStyle(ResolverStyle.STRICT);
   }
 
   /**
@@ -40,8 +41,7 @@ record CalendarStamp(LocalDateTime local, boolean date, CalendarZone zone) {
       return new CalendarStamp(date(value).atTime(LocalTime.MIDNIGHT), true, CalendarZone.UTC);
     }
     if (!value.matches("[0-9]{8}T[0-9]{6}Z?")) {
-      throw new Refusal(
-          shown + " is not a date-time in whole seconds", "such as 20310901T060000Z");
+      throw new Refusal(shown + " is not a date-time in whole seconds", "such as 20310901T060000Z");
     }
     boolean utc = value.endsWith("Z");
     if (utc && !tzid.isEmpty()) {

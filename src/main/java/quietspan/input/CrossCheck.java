@@ -24,7 +24,8 @@ final class CrossCheck {
 
   void run() {
     period();
-    Set<String> craft = ScenarioReader.names(mission.items(MissionFields.CRAFT), MissionFields.Craft.NAME);
+    Set<String> craft =
+        ScenarioReader.names(mission.items(MissionFields.CRAFT), MissionFields.Craft.NAME);
     Set<String> classes = classes();
     for (Located<Values> one : mission.items(MissionFields.CRAFT)) {
       craft(one.value(), classes);
@@ -50,11 +51,13 @@ final class CrossCheck {
       } else if (end.get().secondsSince(begin.get()) > 800 * 86_400.0) {
         period
             .get()
-            .refuse(MissionFields.Period.END, "makes a period of more than 800 days", "at most 800");
+            .refuse(
+                MissionFields.Period.END, "makes a period of more than 800 days", "at most 800");
       } else if (end.get().secondsSince(begin.get()) < 3600) {
         period
             .get()
-            .refuse(MissionFields.Period.END, "makes a period of less than an hour", "at least 1 h");
+            .refuse(
+                MissionFields.Period.END, "makes a period of less than an hour", "at least 1 h");
       }
     }
   }
@@ -94,8 +97,7 @@ final class CrossCheck {
                     MissionFields.Orbit.CORNER, "there is no formation", "formation: in this file");
               }
             });
-    if (craft.maybe(MissionFields.Craft.ATTITUDE).orElse(null)
-            == MissionFields.AttitudeLaw.INERTIAL
+    if (craft.maybe(MissionFields.Craft.ATTITUDE).orElse(null) == MissionFields.AttitudeLaw.INERTIAL
         && craft.maybe(MissionFields.Craft.INERTIAL_FRAME).isEmpty()) {
       craft.refuse(MissionFields.Craft.ATTITUDE, "inertial needs a frame", "inertial_frame:");
     }
@@ -159,7 +161,8 @@ final class CrossCheck {
           if (before != null && !before.isBefore(from.get())) {
             phase
                 .value()
-                .refuse(MissionFields.Phase.FROM, "is not later than the phase before", "time order");
+                .refuse(
+                    MissionFields.Phase.FROM, "is not later than the phase before", "time order");
           }
           before = from.get();
         }
@@ -202,14 +205,11 @@ final class CrossCheck {
   }
 
   private void station(Values station) {
-    ScenarioReader.names(
-        station.items(StationFields.Station.ANTENNAS), StationFields.Antenna.NAME);
-    rising(
-        station.items(StationFields.Station.MASK_BY_AZIMUTH), StationFields.MaskPoint.AT);
+    ScenarioReader.names(station.items(StationFields.Station.ANTENNAS), StationFields.Antenna.NAME);
+    rising(station.items(StationFields.Station.MASK_BY_AZIMUTH), StationFields.MaskPoint.AT);
     for (Located<Values> antenna : station.items(StationFields.Station.ANTENNAS)) {
       Values values = antenna.value();
-      rising(
-          values.items(StationFields.Antenna.G_OVER_T_BY_ELEVATION), StationFields.GainPoint.AT);
+      rising(values.items(StationFields.Antenna.G_OVER_T_BY_ELEVATION), StationFields.GainPoint.AT);
       var least = values.maybe(StationFields.Antenna.MINIMUM_CONTACT);
       var most = values.maybe(StationFields.Antenna.MAXIMUM_CONTACT);
       if (least.isPresent() && most.isPresent() && least.get().compareTo(most.get()) > 0) {
@@ -242,7 +242,9 @@ final class CrossCheck {
       Optional<Angle> before = rows.get(i - 1).value().maybe(field);
       Optional<Angle> here = rows.get(i).value().maybe(field);
       if (before.isPresent() && here.isPresent() && before.get().compareTo(here.get()) >= 0) {
-        rows.get(i).value().refuse(field, "is not above the point before", "points in rising order");
+        rows.get(i)
+            .value()
+            .refuse(field, "is not above the point before", "points in rising order");
       }
     }
   }
@@ -289,8 +291,7 @@ final class CrossCheck {
   }
 
   private void states(Set<String> craft, Set<String> classes) {
-    Set<String> seen =
-        ScenarioReader.names(state.items(StateFields.CRAFT), StateFields.Craft.NAME);
+    Set<String> seen = ScenarioReader.names(state.items(StateFields.CRAFT), StateFields.Craft.NAME);
     for (Located<Values> row : state.items(StateFields.CRAFT)) {
       row.value()
           .maybe(StateFields.Craft.NAME)
@@ -316,7 +317,10 @@ final class CrossCheck {
         Optional<OnboardInstant> oldest = fill.value().maybe(StateFields.Fill.OLDEST);
         if (begin.isPresent() && oldest.isPresent() && oldest.get().isAfter(begin.get())) {
           fill.value()
-              .refuse(StateFields.Fill.OLDEST, "is after the begin of the period", "an earlier instant");
+              .refuse(
+                  StateFields.Fill.OLDEST,
+                  "is after the begin of the period",
+                  "an earlier instant");
         }
       }
       long all = total;
@@ -332,7 +336,10 @@ final class CrossCheck {
               store -> {
                 if (all > store.bits()) {
                   row.value()
-                      .refuse(StateFields.Craft.FILL, "is more than the store holds", "at most the store");
+                      .refuse(
+                          StateFields.Craft.FILL,
+                          "is more than the store holds",
+                          "at most the store");
                 }
               });
     }

@@ -54,7 +54,8 @@ final class Items<T> implements Kind<List<Located<T>>> {
       element
           .read(inner)
           .ifPresent(
-              value -> elements.add(new Located<>(value, inner.place(), inner.path(), spot.source())));
+              value ->
+                  elements.add(new Located<>(value, inner.place(), inner.path(), spot.source())));
     }
     return Optional.of(List.copyOf(elements));
   }

@@ -20,29 +20,31 @@ final class MissionFields {
 
   /** What several blocks share; a class of its own so that blocks can be asked in any order. */
   private static final class Common {
-  static final Quantity<Angle> TURN = Quantity.ANGLE.atLeast("-360 deg").atMost("360 deg");
-  static final Quantity<Angle> HALF_TURN = TURN.atLeast("-90 deg").atMost("90 deg");
-  static final Quantity<Double> LOSS = Quantity.DECIBEL.atLeast("0 dB").atMost("100 dB");
-  static final Quantity<Double> PART = Quantity.SHARE.atLeast("0 %").atMost("100 %");
-  static final Quantity<DataRate> ANY_RATE = Quantity.RATE.above("0 bit/s");
+    static final Quantity<Angle> TURN = Quantity.ANGLE.atLeast("-360 deg").atMost("360 deg");
+    static final Quantity<Angle> HALF_TURN = TURN.atLeast("-90 deg").atMost("90 deg");
+    static final Quantity<Double> LOSS = Quantity.DECIBEL.atLeast("0 dB").atMost("100 dB");
+    static final Quantity<Double> PART = Quantity.SHARE.atLeast("0 %").atMost("100 %");
+    static final Quantity<DataRate> ANY_RATE = Quantity.RATE.above("0 bit/s");
 
-  static final Field<Angle> AZIMUTH_FROM =
-      standard(
-          "azimuth_from", TURN.atLeast("0 deg").below("360 deg"), "0 deg", "Lower azimuth limit.");
-  static final Field<Angle> AZIMUTH_TO =
-      standard(
-          "azimuth_to",
-          TURN.atLeast("0 deg").below("360 deg"),
-          "0 deg",
-          "Upper azimuth limit, reached from the lower one with rising azimuth; equal limits are the"
-              + " whole circle.");
-  static final Field<Angle> STEP =
-      standard(
-          "step",
-          TURN.like("0.25 deg").atLeast("0 deg").atMost("30 deg"),
-          "0 deg",
-          "Aims lie whole steps above the lower limits; 0 deg stands for hundredths of a degree.");
-
+    static final Field<Angle> AZIMUTH_FROM =
+        standard(
+            "azimuth_from",
+            TURN.atLeast("0 deg").below("360 deg"),
+            "0 deg",
+            "Lower azimuth limit.");
+    static final Field<Angle> AZIMUTH_TO =
+        standard(
+            "azimuth_to",
+            TURN.atLeast("0 deg").below("360 deg"),
+            "0 deg",
+            "Upper azimuth limit, reached from the lower one with rising azimuth; equal limits are the"
+                + " whole circle.");
+    static final Field<Angle> STEP =
+        standard(
+            "step",
+            TURN.like("0.25 deg").atLeast("0 deg").atMost("30 deg"),
+            "0 deg",
+            "Aims lie whole steps above the lower limits; 0 deg stands for hundredths of a degree.");
   }
 
   /** The on-board clock's planning period. */
@@ -106,8 +108,7 @@ final class MissionFields {
             Quantity.DISTANCE.like("1 au").atLeast("0.1 au").atMost("10 au"),
             "Semi-major axis.");
     static final Field<Double> ECCENTRICITY =
-        required(
-            "eccentricity", Plain.number("an eccentricity", "0.0031", 0.9), "Eccentricity.");
+        required("eccentricity", Plain.number("an eccentricity", "0.0031", 0.9), "Eccentricity.");
     static final Field<Angle> INCLINATION =
         required(
             "inclination",
@@ -175,9 +176,13 @@ final class MissionFields {
   /** A body frame that stands still among the stars. */
   static final class InertialFrame {
     static final Field<Angle> RIGHT_ASCENSION =
-        required("right_ascension", Common.TURN.like("85 deg"), "Right ascension of body X in the ICRF.");
+        required(
+            "right_ascension",
+            Common.TURN.like("85 deg"),
+            "Right ascension of body X in the ICRF.");
     static final Field<Angle> DECLINATION =
-        required("declination", Common.HALF_TURN.like("-20 deg"), "Declination of body X in the ICRF.");
+        required(
+            "declination", Common.HALF_TURN.like("-20 deg"), "Declination of body X in the ICRF.");
     static final Field<Angle> ROLL =
         standard(
             "roll",
@@ -201,8 +206,7 @@ final class MissionFields {
         standard("elevation_to", Common.HALF_TURN, "90 deg", "Upper elevation limit.");
     static final Field<Angle> STEPS = Common.STEP;
     static final Block TABLE =
-        Block.of(
-            "the travel of two axes", FROM, TO, ELEVATION_FROM, ELEVATION_TO, STEPS);
+        Block.of("the travel of two axes", FROM, TO, ELEVATION_FROM, ELEVATION_TO, STEPS);
 
     private TwoAxes() {}
   }
@@ -332,7 +336,10 @@ final class MissionFields {
                 + " rate).");
     static final Field<Double> SHARE_IN_PAUSES =
         standard(
-            "share_in_pauses", Common.PART.like("15 %"), "100 %", "Part of the rate made during pauses.");
+            "share_in_pauses",
+            Common.PART.like("15 %"),
+            "100 %",
+            "Part of the rate made during pauses.");
     static final Block TABLE =
         Block.of("what is made of one data class", DATA_CLASS, RATE, PHASES, CSV, SHARE_IN_PAUSES)
             .exactlyOne(RATE, PHASES, CSV);
@@ -398,7 +405,10 @@ final class MissionFields {
             "Required energy per bit over noise density.");
     static final Field<Double> IMPLEMENTATION_LOSS =
         standard(
-            "implementation_loss", Common.LOSS.like("1 dB"), "0 dB", "Receiver's loss against theory.");
+            "implementation_loss",
+            Common.LOSS.like("1 dB"),
+            "0 dB",
+            "Receiver's loss against theory.");
     static final Field<Double> OTHER_LOSSES =
         standard("other_losses", Common.LOSS.like("0.3 dB"), "0 dB", "Polarisation and the like.");
     static final Field<Double> MARGIN =
@@ -621,9 +631,7 @@ final class MissionFields {
       optional("formation", Formation.TABLE, "The triangle whose corners craft may take.");
   static final Field<List<Located<Values>>> CRAFT =
       required(
-          "craft",
-          Items.atLeastOne(Craft.TABLE),
-          "The craft; their order decides among equals.");
+          "craft", Items.atLeastOne(Craft.TABLE), "The craft; their order decides among equals.");
   static final Field<Values> LINK =
       optional("link", Link.TABLE, "What all links share; needed where a craft has a ladder.");
   static final Field<Values> SCIENCE =

@@ -16,7 +16,8 @@ import quietspan.time.OnboardInstant;
 /** An instant in whole seconds; which clock it is on stands in the name of its field. */
 final class Moment<T> extends Scalar<T> {
 
-  private static final String SHAPE = "([0-9]{4})-([0-9]{2})-([0-9]{2})T([0-9]{2}):([0-9]{2})(?::([0-9]{2}))?";
+  private static final String SHAPE =
+      "([0-9]{4})-([0-9]{2})-([0-9]{2})T([0-9]{2}):([0-9]{2})(?::([0-9]{2}))?";
   private static final Pattern DIGITS = Pattern.compile(SHAPE + "(.*)");
 
   static final Moment<OnboardInstant> ONBOARD =

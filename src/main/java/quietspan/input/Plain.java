@@ -156,7 +156,8 @@ final class Plain {
       Double parse(String text) throws Refusal {
         if (!Quantity.isNumber(text)) {
           throw new Refusal(
-              Refusal.quoted(text) + " is not a number", "a number without unit such as " + example);
+              Refusal.quoted(text) + " is not a number",
+              "a number without unit such as " + example);
         }
         double number = Quantity.number(text).doubleValue();
         if (number < 0 || number >= below) {

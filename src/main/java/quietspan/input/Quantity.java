@@ -31,7 +31,8 @@ final class Quantity<T> extends Scalar<T> {
   /** A limit on the value; {@code open} when the limit itself is not allowed. */
   private record Edge(String text, BigDecimal baseUnits, boolean open) {}
 
-  private static final String NUMBER = "[+-]?(?:[0-9]+(?:\\.[0-9]*)?|\\.[0-9]+)(?:[eE][+-]?[0-9]+)?";
+  private static final String NUMBER =
+      "[+-]?(?:[0-9]+(?:\\.[0-9]*)?|\\.[0-9]+)(?:[eE][+-]?[0-9]+)?";
   private static final Pattern SHAPE = Pattern.compile("(" + NUMBER + ")\\s*(\\S.*)?");
   private static final int LONGEST_NUMBER = 40;
   private static final int LARGEST_EXPONENT = 30;
@@ -77,10 +78,7 @@ final class Quantity<T> extends Scalar<T> {
 
   /** In hertz. */
   static final Quantity<Double> FREQUENCY =
-      plain(
-          "a frequency",
-          "8.42 GHz",
-          units("Hz", "1", "kHz", "1e3", "MHz", "1e6", "GHz", "1e9"));
+      plain("a frequency", "8.42 GHz", units("Hz", "1", "kHz", "1e3", "MHz", "1e6", "GHz", "1e9"));
 
   /** In decibels. */
   static final Quantity<Double> DECIBEL = plain("a ratio", "3 dB", units("dB", "1"));
@@ -141,8 +139,7 @@ final class Quantity<T> extends Scalar<T> {
       return amount.longValueExact();
     } catch (ArithmeticException e) {
       throw new Refusal(
-          Refusal.quoted(text) + " is not a whole number of " + unit,
-          "a whole number of " + unit);
+          Refusal.quoted(text) + " is not a whole number of " + unit, "a whole number of " + unit);
     }
   }
 
@@ -192,12 +189,18 @@ final class Quantity<T> extends Scalar<T> {
     BigDecimal amount = baseUnits(text);
     if (low.isPresent() && outside(amount.compareTo(low.get().baseUnits()), low.get())) {
       throw new Refusal(
-          Refusal.quoted(text) + " is " + (low.get().open() ? "not above " : "below ") + low.get().text(),
+          Refusal.quoted(text)
+              + " is "
+              + (low.get().open() ? "not above " : "below ")
+              + low.get().text(),
           limits());
     }
     if (high.isPresent() && outside(-amount.compareTo(high.get().baseUnits()), high.get())) {
       throw new Refusal(
-          Refusal.quoted(text) + " is " + (high.get().open() ? "not below " : "above ") + high.get().text(),
+          Refusal.quoted(text)
+              + " is "
+              + (high.get().open() ? "not below " : "above ")
+              + high.get().text(),
           limits());
     }
     return conversion.of(amount, text);
@@ -241,7 +244,10 @@ final class Quantity<T> extends Scalar<T> {
         || Math.abs(Integer.parseInt(exponent)) > LARGEST_EXPONENT) {
       throw new Refusal(
           Refusal.quoted(text) + " is too long or too large a number",
-          "at most " + LONGEST_NUMBER + " characters and an exponent of at most " + LARGEST_EXPONENT);
+          "at most "
+              + LONGEST_NUMBER
+              + " characters and an exponent of at most "
+              + LARGEST_EXPONENT);
     }
     return new BigDecimal(text);
   }

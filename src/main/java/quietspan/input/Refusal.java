@@ -1,6 +1,8 @@
 package quietspan.input;
 
-/** A value cannot be taken; the reader of the field adds where it stands. Never leaves the package. */
+/**
+ * A value cannot be taken; the reader of the field adds where it stands. Never leaves the package.
+ */
 final class Refusal extends Exception {
 
   private static final long serialVersionUID = 1L;

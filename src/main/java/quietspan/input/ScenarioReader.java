@@ -59,7 +59,8 @@ public final class ScenarioReader {
   }
 
   /**
-   * Reads {@code mission.yaml}, {@code stations.yaml}, {@code state.yaml} and the calendars they name.
+   * Reads {@code mission.yaml}, {@code stations.yaml}, {@code state.yaml} and the calendars they
+   * name.
    *
    * @param issued time stamp to use in place of the mission's own
    * @throws InputException with every complaint when anything is wrong
@@ -69,7 +70,10 @@ public final class ScenarioReader {
     if (!reader.folder.exists()) {
       throw new InputException(
           Problem.error(
-              Place.wholeFile(root.toString()), "", "there is no such folder", "a scenario folder"));
+              Place.wholeFile(root.toString()),
+              "",
+              "there is no such folder",
+              "a scenario folder"));
     }
     return reader.read(issued);
   }
@@ -149,8 +153,7 @@ public final class ScenarioReader {
     }
   }
 
-  private Calendars calendars(
-      List<LocatedEvents> all, List<Station> stations, List<Craft> craft) {
+  private Calendars calendars(List<LocatedEvents> all, List<Station> stations, List<Craft> craft) {
     List<Blocked> blocked = new ArrayList<>();
     List<Guarded> guarded = new ArrayList<>();
     List<Interruption> interruptions = new ArrayList<>();
@@ -173,7 +176,8 @@ public final class ScenarioReader {
         }
       }
     }
-    blocked.sort(Comparator.comparing((Blocked b) -> b.during().begin()).thenComparing(Blocked::station));
+    blocked.sort(
+        Comparator.comparing((Blocked b) -> b.during().begin()).thenComparing(Blocked::station));
     guarded.sort(Comparator.comparing(one -> one.during().begin()));
     interruptions.sort(Comparator.comparing(one -> one.during().begin()));
     confirmed.sort(Comparator.comparing(one -> one.during().begin()));
@@ -252,8 +256,7 @@ public final class ScenarioReader {
             mission.get(MissionFields.MISSION),
             issued.orElse(mission.get(MissionFields.ISSUED)),
             folder.inputs()),
-        Interval.of(
-            period.get(MissionFields.Period.BEGIN), period.get(MissionFields.Period.END)),
+        Interval.of(period.get(MissionFields.Period.BEGIN), period.get(MissionFields.Period.END)),
         craft,
         stations,
         rules(mission),
@@ -288,8 +291,7 @@ public final class ScenarioReader {
       Angle lead =
           formation
               .maybe(MissionFields.Formation.LEADING)
-              .orElseGet(
-                  () -> Angle.ZERO.minus(formation.get(MissionFields.Formation.TRAILING)));
+              .orElseGet(() -> Angle.ZERO.minus(formation.get(MissionFields.Formation.TRAILING)));
       return new Orbit.Formation(
           formation.get(MissionFields.Formation.EPOCH),
           formation.get(MissionFields.Formation.ARM),
@@ -560,7 +562,8 @@ public final class ScenarioReader {
           .ifPresent(
               name -> {
                 if (!seen.add(name)) {
-                  row.value().refuse(field, "\"" + name + "\" stands here a second time", "unique names");
+                  row.value()
+                      .refuse(field, "\"" + name + "\" stands here a second time", "unique names");
                 }
               });
     }

@@ -16,13 +16,12 @@ final class StationFields {
 
   /** What several blocks share; a class of its own so that blocks can be asked in any order. */
   private static final class Common {
-  static final Quantity<Angle> ELEVATION =
-      Quantity.ANGLE.like("10 deg").atLeast("0 deg").atMost("90 deg");
-  static final Quantity<Angle> AZIMUTH =
-      Quantity.ANGLE.like("120 deg").atLeast("0 deg").atMost("360 deg");
-  static final Quantity<Double> FIGURE_OF_MERIT =
-      Quantity.GAIN_OVER_TEMPERATURE.atLeast("-50 dB/K").atMost("100 dB/K");
-
+    static final Quantity<Angle> ELEVATION =
+        Quantity.ANGLE.like("10 deg").atLeast("0 deg").atMost("90 deg");
+    static final Quantity<Angle> AZIMUTH =
+        Quantity.ANGLE.like("120 deg").atLeast("0 deg").atMost("360 deg");
+    static final Quantity<Double> FIGURE_OF_MERIT =
+        Quantity.GAIN_OVER_TEMPERATURE.atLeast("-50 dB/K").atMost("100 dB/K");
   }
 
   /** A corner of a skyline. */
@@ -37,7 +36,8 @@ final class StationFields {
 
   /** G/T at an elevation. */
   static final class GainPoint {
-    static final Field<Angle> AT = required("elevation", Common.ELEVATION, "Elevation of the antenna.");
+    static final Field<Angle> AT =
+        required("elevation", Common.ELEVATION, "Elevation of the antenna.");
     static final Field<Double> VALUE = required("g_over_t", Common.FIGURE_OF_MERIT, "G/T there.");
     static final Block TABLE = Block.of("G/T at an elevation", AT, VALUE);
 
@@ -51,7 +51,10 @@ final class StationFields {
         required("azimuth_to", Common.AZIMUTH, "Where it ends, reached with rising azimuth.");
     static final Field<Angle> UP_TO =
         standard(
-            "up_to_elevation", Common.ELEVATION, "90 deg", "Elevation below which nothing is received.");
+            "up_to_elevation",
+            Common.ELEVATION,
+            "90 deg",
+            "Elevation below which nothing is received.");
     static final Block TABLE = Block.of("a dead zone", FROM, TO, UP_TO);
 
     private DeadZone() {}
@@ -84,11 +87,9 @@ final class StationFields {
     static final Field<List<Located<Values>>> DEAD_ZONES =
         standard("dead_zones", Items.of(DeadZone.TABLE), "[]", "Sectors without reception.");
     static final Field<Duration> SETUP =
-        required(
-            "setup", Quantity.DURATION.like("45 min"), "Antenna busy before each contact.");
+        required("setup", Quantity.DURATION.like("45 min"), "Antenna busy before each contact.");
     static final Field<Duration> TEARDOWN =
-        required(
-            "teardown", Quantity.DURATION.like("15 min"), "Antenna busy after each contact.");
+        required("teardown", Quantity.DURATION.like("15 min"), "Antenna busy after each contact.");
     static final Field<Duration> CHANGEOVER =
         optional(
             "changeover",

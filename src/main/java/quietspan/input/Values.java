@@ -28,7 +28,8 @@ final class Values {
   /** A value that must be there once everything was read without complaint. */
   <T> T get(Field<T> field) {
     return maybe(field)
-        .orElseThrow(() -> new IllegalStateException(path(field) + " was read before it was checked"));
+        .orElseThrow(
+            () -> new IllegalStateException(path(field) + " was read before it was checked"));
   }
 
   /** The elements of a list that could be read; none when the list is absent. */

@@ -35,7 +35,8 @@ final class Word<T> extends Scalar<T> {
     T value = choices.get(text);
     if (value == null) {
       throw new Refusal(
-          Refusal.quoted(text) + " is not known here" + Nearest.hint(text, choices.keySet()), noun());
+          Refusal.quoted(text) + " is not known here" + Nearest.hint(text, choices.keySet()),
+          noun());
     }
     return value;
   }

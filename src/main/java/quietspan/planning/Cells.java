@@ -377,7 +377,10 @@ final class Cells {
     return stops.get(cell);
   }
 
-  /** What interruptions that begin in a cell cost on their own: their length, and a warm-up after each. */
+  /**
+   * What interruptions that begin in a cell cost on their own: their length, and a warm-up after
+   * each.
+   */
   long stopsLoss(int cell) {
     long loss = 0;
     for (Stop stop : stops.get(cell)) {
@@ -734,7 +737,7 @@ final class Cells {
       }
       merges |= touches;
       extra = Math.min(extra, more);
-      long cost = more + (touches ? 0 : warmUp);
+      long cost = (long) more + (touches ? 0 : warmUp);
       if (cost < bestCost) {
         bestCost = cost;
         best = start;

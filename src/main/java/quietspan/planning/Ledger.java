@@ -82,7 +82,6 @@ final class Ledger {
   private final long[][] total;
   private final int[][] head;
   private final long[][][] bins;
-  private final long[] ownAhead;
 
   private final Day[] days;
   private int validDays;
@@ -136,7 +135,6 @@ final class Ledger {
     this.total = new long[craftCount][classCount];
     this.head = new int[craftCount][classCount];
     this.bins = new long[craftCount][classCount][steps + older + 1];
-    this.ownAhead = new long[craftCount];
     this.days = new Day[steps / STEPS_A_DAY + 2];
     this.validDays = 0;
     this.dirtyFrom = 0;
@@ -452,7 +450,7 @@ final class Ledger {
     }
     for (int c = 0; c < craftCount; c++) {
       if (sendable[c][step] > 0) {
-        transmit(c, sendable[c][step], step, bin);
+        transmit(c, sendable[c][step], bin);
       }
       long held = fillOf(c);
       if (held > planned[c]) {
@@ -505,7 +503,7 @@ final class Ledger {
     return moved;
   }
 
-  private void transmit(int c, long quota, int step, int bin) {
+  private void transmit(int c, long quota, int bin) {
     long left = quota;
     for (int k = 0; k < classCount && left > 0; k++) {
       int at = head[c][k];

@@ -28,9 +28,9 @@ import quietspan.time.OnboardInstant;
 import quietspan.units.DataRate;
 
 /**
- * Plans a scenario: a skeleton of pauses and beams by dynamic programming, a legal seed of contacts in it, a
- * joint polish, and a bound that says how far any plan can be from this one. A pure function of its arguments,
- * however many processors there are.
+ * Plans a scenario: a skeleton of pauses and beams by dynamic programming, a legal seed of contacts
+ * in it, a joint polish, and a bound that says how far any plan can be from this one. A pure
+ * function of its arguments, however many processors there are.
  */
 public final class Planner {
 
@@ -58,6 +58,8 @@ public final class Planner {
    */
   public record Result(
       Decisions decisions, Outcome outcome, Bound bound, long stepsDone, boolean interrupted) {}
+
+  private static final int TRIES = 4;
 
   private final Scenario scenario;
   private final Geometry geometry;
@@ -87,6 +89,8 @@ public final class Planner {
   }
 
   /**
+   * Plans a scenario.
+   *
    * @param stop set from outside, ends the polish with what it has
    */
   public static Result plan(
@@ -152,31 +156,30 @@ public final class Planner {
 
   private Result run() {
     progress.stage("bound and skeleton");
-    BoundSearch search = new BoundSearch(tables, links, waivers, Relaxation.all(), options.boundWork());
+    BoundSearch search =
+        new BoundSearch(tables, links, waivers, Relaxation.all(), options.boundWork());
     CompletableFuture<Bound> bound =
         CompletableFuture.supplyAsync(
             () -> search.bound(Long.MAX_VALUE / 16, Long.MAX_VALUE / 16), Planner::daemon);
     Seed seed = new Seed(tables, links, waivers, progress);
     Roster roster = seed.roster();
     progress.stage("contacts");
-    Decisions decisions = null;
-    Outcome outcome = null;
+    Decisions decisions = decisions(roster);
+    Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
     int guard = Seed.FIRST_GUARD;
-    for (int i = 0; i < 4; i++) {
-      if (roster.shortfall().none()) {
-        new Trimmer(roster, seed.fixed()).trim();
-      }
+    for (int i = 0; i < TRIES && !stop.get(); i++) {
+      new Trimmer(roster, seed.fixed()).trim();
       Decisions tried = decisions(roster);
       Outcome played = Simulation.simulate(scenario, geometry.sightLines(), tried, waivers);
-      if (outcome == null || played.findings().size() < outcome.findings().size()) {
+      if (played.findings().size() <= outcome.findings().size()) {
         decisions = tried;
         outcome = played;
       }
-      if (outcome.findings().isEmpty() || stop.get()) {
+      if (played.findings().isEmpty()) {
         break;
       }
       // The ledger's ten minutes were too coarse somewhere: again with more room.
-      guard += 1200;
+      guard += 900;
       roster = seed.refilled(roster.draft(), guard);
     }
     return new Result(decisions, outcome, bound.join(), 0, stop.get());
@@ -212,13 +215,14 @@ public final class Planner {
       Optional<ConfirmedContact> confirmed = confirmed(antenna, name, Interval.of(begin, end));
       contacts.add(
           new Contact(
-              confirmed.map(ConfirmedContact::id).orElse("C-" + String.format(java.util.Locale.ROOT, "%04d", contacts.size() + 1)),
+              confirmed
+                  .map(ConfirmedContact::id)
+                  .orElse("C-" + String.format(java.util.Locale.ROOT, "%04d", contacts.size() + 1)),
               antenna.station().name(),
               antenna.dish().name(),
               name,
               Interval.of(begin, end),
-              List.of(
-                  new RateStep(begin, new DataRate(tables.ladder[use.craft()][use.step()]))),
+              List.of(new RateStep(begin, new DataRate(tables.ladder[use.craft()][use.step()]))),
               Set.of(Contact.Service.TELEMETRY),
               confirmed.isPresent() ? Contact.Status.CONFIRMED : Contact.Status.TENTATIVE));
     }

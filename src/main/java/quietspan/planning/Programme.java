@@ -76,13 +76,7 @@ final class Programme {
   }
 
   Programme(
-      Cells cells,
-      Aim aim,
-      boolean keepParents,
-      ToGo toGo,
-      long cutoff,
-      long work,
-      int width) {
+      Cells cells, Aim aim, boolean keepParents, ToGo toGo, long cutoff, long work, int width) {
     this.toGo = toGo;
     this.work = work;
     this.width = width;

@@ -8,10 +8,10 @@ import java.util.TreeSet;
 import quietspan.model.Waiver;
 
 /**
- * A first plan: the skeleton of the programme on planning cells, every contact that fits in it, and the data
- * rules asked of the ledger. Where they break, the cells are shaded (less capacity, less time before data are
- * late, less room) and the skeleton is built anew; the first plan that keeps the rules is taken, else the
- * least bad one.
+ * A first plan: the skeleton of the programme on planning cells, every contact that fits in it, and
+ * the data rules asked of the ledger. Where they break, the cells are shaded (less capacity, less
+ * time before data are late, less room) and the skeleton is built anew; the first plan that keeps
+ * the rules is taken, else the least bad one.
  */
 final class Seed {
 
@@ -125,7 +125,7 @@ final class Seed {
                 "skeleton on cells of "
                     + grid / 60
                     + " min: "
-                    + (tables.length - found.loss()) / 360 / 10.0
+                    + Math.floor((tables.length - found.loss()) / 360.0) / 10
                     + " h"));
     return solution.map(found -> new Draft(tables, new Skeleton(tables, cells).moves(found)));
   }

@@ -92,7 +92,6 @@ final class Tables {
   /** Usable half-cone (rad). */
   final double[] usable;
 
-
   /** Repoint with settling, spacing and last repoint before the period of each craft (s). */
   final int[] repoint;
 
@@ -312,7 +311,7 @@ final class Tables {
     Look look = null;
     for (Antenna antenna : antennas) {
       if (antenna.index() == 0
-          || antennas.get(antenna.index() - 1).station() != antenna.station()) {
+          || !antennas.get(antenna.index() - 1).station().equals(antenna.station())) {
         look = sky.look(antenna.station().name(), craft.name(), received);
       }
       centre[c][antenna.index()][i] =

@@ -73,7 +73,8 @@ final class ToGo {
             continue;
           }
           int length = cells.levelLength(level);
-          // A pause that grows costs its length; what it renews is free from its last repoint on. Time of
+          // A pause that grows costs its length; what it renews is free from its last repoint on.
+          // Time of
           // interruptions inside it is counted with them already.
           for (int more = 0; j + more <= n && more <= 8 * saving; more++) {
             int renewed = Math.max(i + 1, j + more);
@@ -103,7 +104,9 @@ final class ToGo {
                 growing[i],
                 fresh[i + more]
                     + (losing
-                        ? Math.max(0, (long) Math.max(0, more - 1) * h - cells.stopsWithin(i, i + more + 1))
+                        ? Math.max(
+                            0,
+                            (long) Math.max(0, more - 1) * h - cells.stopsWithin(i, i + more + 1))
                         : 0));
       }
     }

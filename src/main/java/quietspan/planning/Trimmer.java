@@ -6,8 +6,8 @@ import java.util.List;
 import java.util.Set;
 
 /**
- * Takes contacts out of a roster that keeps the data rules, and shortens others, as long as it still keeps
- * them: the dearest data first.
+ * Takes contacts out of a roster that keeps the data rules, and shortens others, as long as it
+ * still keeps them: the dearest data first.
  */
 final class Trimmer {
 
@@ -18,20 +18,23 @@ final class Trimmer {
   private final Roster roster;
   private final Set<Use> fixed;
 
+  /** Breaches that the ledger sees already; trimming adds none. */
+  private final long allowed;
+
   Trimmer(Roster roster, Set<Use> fixed) {
     this.tables = roster.tables;
     this.roster = roster;
     this.fixed = fixed;
+    this.allowed = roster.shortfall().weight();
   }
 
   void trim() {
     List<Use> byPrice = new ArrayList<>(roster.uses());
-    byPrice.sort(
-        Comparator.comparingDouble((Use use) -> -price(use)).thenComparingInt(Use::begin));
+    byPrice.sort(Comparator.comparingDouble((Use use) -> -price(use)).thenComparingInt(Use::begin));
     for (Use use : byPrice) {
       if (!fixed.contains(use)) {
         roster.remove(use);
-        if (!roster.shortfall().none()) {
+        if (roster.shortfall().weight() > allowed) {
           roster.add(use);
         }
       }
@@ -66,7 +69,7 @@ final class Trimmer {
         less = new Use(use.craft(), use.antenna(), begin, end, Math.max(step, use.step()));
         roster.remove(use);
         roster.add(less);
-        if (roster.shortfall().none()) {
+        if (roster.shortfall().weight() <= allowed) {
           use = less;
           changed = true;
         } else {

@@ -19,9 +19,10 @@ import quietspan.time.Interval;
 import quietspan.time.IntervalSet;
 
 /**
- * Finds every opportunity: passes rounded inward, without keyholes, dead zones, elevation limits and Sun limit,
- * without stretches that are not ours (setup and teardown kept clear of them), and only where a rate closes on
- * the beam's axis. Pieces shorter than the shortest contact are left out.
+ * Finds every opportunity: passes rounded inward, without keyholes, dead zones, elevation limits
+ * and Sun limit, without stretches that are not ours (setup and teardown kept clear of them), and
+ * only where a rate closes on the beam's axis. Pieces shorter than the shortest contact are left
+ * out.
  */
 public final class Opportunities {
 

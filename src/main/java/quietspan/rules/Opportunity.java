@@ -5,8 +5,8 @@ import quietspan.time.GroundInstant;
 import quietspan.time.Interval;
 
 /**
- * A stretch in which an antenna could hear a craft, as far as the scenario alone decides: beams centred, the
- * antenna not shared with others of our craft.
+ * A stretch in which an antenna could hear a craft, as far as the scenario alone decides: beams
+ * centred, the antenna not shared with others of our craft.
  *
  * @param during ground receive time, whole seconds, rounded inward
  */

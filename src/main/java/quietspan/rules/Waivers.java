@@ -16,10 +16,10 @@ import quietspan.time.GroundInstant;
 import quietspan.time.Interval;
 
 /**
- * Limits that no plan can keep, because geometry, outages and lent slots leave a stretch without any
- * opportunity that is longer than the limit. A function of the scenario alone, for GAP, DIRECT and LATENCY; the
- * relaxed limit is that stretch, rounded up to the second, for LATENCY with light time and delivery delay on
- * top. Lost data and fill are never waived.
+ * Limits that no plan can keep, because geometry, outages and lent slots leave a stretch without
+ * any opportunity that is longer than the limit. A function of the scenario alone, for GAP, DIRECT
+ * and LATENCY; the relaxed limit is that stretch, rounded up to the second, for LATENCY with light
+ * time and delivery delay on top. Lost data and fill are never waived.
  */
 public final class Waivers {
 
@@ -51,8 +51,7 @@ public final class Waivers {
   private GroundInstant ground(Craft craft, boolean begin) {
     return geometry
         .sightLines()
-        .ground(
-            craft.name(), begin ? scenario.period().begin() : scenario.period().end());
+        .ground(craft.name(), begin ? scenario.period().begin() : scenario.period().end());
   }
 
   private void gaps() {
@@ -123,9 +122,7 @@ public final class Waivers {
   }
 
   private static Duration ceil(Duration duration) {
-    return duration.getNano() == 0
-        ? duration
-        : Duration.ofSeconds(duration.getSeconds() + 1);
+    return duration.getNano() == 0 ? duration : Duration.ofSeconds(duration.getSeconds() + 1);
   }
 
   /** A bit made at the begin of a stretch without opportunity waits for all of it. */
@@ -141,8 +138,7 @@ public final class Waivers {
         if (!makes) {
           continue;
         }
-        boolean forwards =
-            craft.crossLink().bitsPerSecond() > 0 && scenario.craft().size() > 1;
+        boolean forwards = craft.crossLink().bitsPerSecond() > 0 && scenario.craft().size() > 1;
         List<Interval<GroundInstant>> stretches =
             Opportunities.without(
                 forwards ? opportunities : of(craft), ground(craft, true), ground(craft, false));

@@ -3,8 +3,9 @@ package quietspan.planning.simulation;
 import java.util.Arrays;
 
 /**
- * Bits of one data class in one store, by the second in which they were made. Kept as stretches of seconds that
- * hold equally many bits each, oldest first; neighbours that hold the same are one stretch.
+ * Bits of one data class in one store, by the second in which they were made. Kept as stretches of
+ * seconds that hold equally many bits each, oldest first; neighbours that hold the same are one
+ * stretch.
  */
 final class Parcels {
 

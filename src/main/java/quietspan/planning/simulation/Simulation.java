@@ -36,8 +36,9 @@ import quietspan.units.DataRate;
 import quietspan.units.DataVolume;
 
 /**
- * The outcome of a plan. Stores are integers and change on whole on-board seconds, within a second in the order
- * generate, cross-link, transmit, overflow; seconds without any transfer are taken in one go.
+ * The outcome of a plan. Stores are integers and change on whole on-board seconds, within a second
+ * in the order generate, cross-link, transmit, overflow; seconds without any transfer are taken in
+ * one go.
  */
 public final class Simulation {
 
@@ -129,8 +130,7 @@ public final class Simulation {
     }
   }
 
-  private Simulation(
-      Scenario scenario, SightLines sky, Decisions decisions, List<Waiver> waivers) {
+  private Simulation(Scenario scenario, SightLines sky, Decisions decisions, List<Waiver> waivers) {
     this.scenario = scenario;
     this.sky = sky;
     this.waivers = waivers;
@@ -252,8 +252,7 @@ public final class Simulation {
   private double cost() {
     double cost = 0;
     for (Contact contact : contacts) {
-      Dish dish =
-          scenario.station(contact.station()).dish(contact.antenna()).orElseThrow();
+      Dish dish = scenario.station(contact.station()).dish(contact.antenna()).orElseThrow();
       cost +=
           dish.costPerContact()
               + dish.costPerHour() * contact.during().length().toSeconds() / 3600.0;
@@ -443,7 +442,9 @@ public final class Simulation {
         .orElse(List.of());
   }
 
-  /** Until when a sink's own data count against its room: its contact's end, else its next begin. */
+  /**
+   * Until when a sink's own data count against its room: its contact's end, else its next begin.
+   */
   private int ownUntil(int craft, int second, List<Image> now) {
     int until = second;
     for (Image image : now) {
@@ -559,8 +560,7 @@ public final class Simulation {
     }
     if (links) {
       int sink = sinks.get(0);
-      long room =
-          Math.max(0, planned[sink] - ownBits(sink, s + 1, sinkUntil[sink], rate)) - fill(sink);
+      long room = Math.max(0, planned[sink] - ownBits(sink, s + 1, sinkUntil[sink])) - fill(sink);
       for (int c = 0; c < craftCount && room > 0; c++) {
         if (!sinks.contains(c) && crossLink[c] > 0) {
           room -= forward(c, sink, Math.min(room, crossLink[c]));
@@ -598,7 +598,7 @@ public final class Simulation {
   }
 
   /** What a sink will make itself; constant rates within a contact need no loop. */
-  private long ownBits(int c, int from, int to, long[][] rate) {
+  private long ownBits(int c, int from, int to) {
     if (from >= to) {
       return 0;
     }
@@ -674,7 +674,7 @@ public final class Simulation {
           scenario.craft().get(image.craft).name(),
           image.contact.station(),
           classes.get(k).name(),
-          image.late[k],
+          (double) image.late[k],
           image.late[k] + " bit of " + classes.get(k).name() + " arrive late");
       image.late[k] = 0;
     }
@@ -730,11 +730,10 @@ public final class Simulation {
     for (Waiver waiver : waivers) {
       if (waiver.rule() == RuleId.LATENCY
           && waiver.dataClass().equals(classes.get(k).name())
-          && (waiver.craft().isEmpty()
-              || waiver.craft().equals(scenario.craft().get(c).name()))
+          && (waiver.craft().isEmpty() || waiver.craft().equals(scenario.craft().get(c).name()))
           && !instant(made).utc().isBefore(waiver.begin())
           && instant(made).utc().isBefore(waiver.end())) {
-        limit = Math.max(limit, waiver.relaxedLimit().toSeconds());
+        limit = Math.max(limit, (double) waiver.relaxedLimit().toSeconds());
       }
     }
     return limit;
@@ -776,7 +775,7 @@ public final class Simulation {
         scenario.craft().get(c).name(),
         "",
         "",
-        loss[c],
+        (double) loss[c],
         loss[c] + " bit do not fit");
     lossSince[c] = -1;
     loss[c] = 0;
@@ -789,7 +788,7 @@ public final class Simulation {
         scenario.craft().get(c).name(),
         "",
         "",
-        over[c],
+        (double) over[c],
         "above the planned fill");
     overSince[c] = -1;
     over[c] = 0;
@@ -849,7 +848,7 @@ public final class Simulation {
             craft.name(),
             "",
             "",
-            fill(c) - allowed,
+            (double) (fill(c) - allowed),
             fill(c) + " bit aboard at the end, " + allowed + " allowed");
       }
     }
@@ -864,11 +863,10 @@ public final class Simulation {
       for (int c = 0; c < craftCount; c++) {
         int craft = c;
         if (store[c][k].total() > 0) {
-          longest[k] = Math.max(longest[k], length - store[c][k].oldest());
+          longest[k] = Math.max(longest[k], (double) (length - store[c][k].oldest()));
         }
         store[c][k].all(
-            (from, to, bits) ->
-                late[0] += lateBits(craft, dataClass, from, to, bits, length));
+            (from, to, bits) -> late[0] += lateBits(craft, dataClass, from, to, bits, length));
       }
       if (late[0] > 0) {
         lateByClass[k] += late[0];
@@ -878,7 +876,7 @@ public final class Simulation {
             "",
             "",
             classes.get(k).name(),
-            late[0],
+            (double) late[0],
             late[0] + " bit of " + classes.get(k).name() + " aboard at the end are late");
       }
     }
@@ -941,7 +939,8 @@ public final class Simulation {
     gap(rule, craft, last, sky.ground(clock.name(), scenario.period().end()), limit);
   }
 
-  private void gap(RuleId rule, String craft, GroundInstant from, GroundInstant to, Duration limit) {
+  private void gap(
+      RuleId rule, String craft, GroundInstant from, GroundInstant to, Duration limit) {
     if (!from.isBefore(to)) {
       return;
     }
@@ -951,7 +950,7 @@ public final class Simulation {
           && waiver.craft().equals(craft)
           && waiver.begin().isBefore(to.utc())
           && waiver.end().isAfter(from.utc())) {
-        allowed = Math.max(allowed, waiver.relaxedLimit().toSeconds());
+        allowed = Math.max(allowed, (double) waiver.relaxedLimit().toSeconds());
       }
     }
     double seconds = to.secondsSince(from);
@@ -995,7 +994,7 @@ public final class Simulation {
             craft.name(),
             "",
             "",
-            asked - Math.max(0, covered - 30),
+            (double) (asked - Math.max(0, covered - 30)),
             "the aim at the end holds the Earth for " + Math.max(0, covered - 30) + " s");
       }
     }

@@ -15,7 +15,8 @@ import quietspan.time.OnboardInstant;
 /**
  * Pauses and quiet spans of a plan, and what the spans are worth.
  *
- * @param pauses repoints and interruptions inside the period that overlap or touch, merged, in time order
+ * @param pauses repoints and interruptions inside the period that overlap or touch, merged, in time
+ *     order
  * @param quiet what remains of the period
  * @param scienceSeconds the sum of the spans' values
  */
@@ -93,10 +94,6 @@ public record Spans(List<Pause> pauses, List<QuietSpan> quiet, long scienceSecon
     long left = Math.max(0, warmUp - (begin.epochSecond() - really.epochSecond()));
     boolean counts = last || length >= scenario.rules().science().minimumSpan().toSeconds();
     return new QuietSpan(
-        Interval.of(begin, end),
-        length,
-        counts ? Math.max(0, inside - left) : 0,
-        first,
-        last);
+        Interval.of(begin, end), length, counts ? Math.max(0, inside - left) : 0, first, last);
   }
 }
