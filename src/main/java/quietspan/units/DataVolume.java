@@ -1,5 +1,8 @@
 package quietspan.units;
 
+import java.math.BigDecimal;
+import java.math.RoundingMode;
+
 /** An amount of data in whole bits, never negative. */
 public record DataVolume(long bits) implements Comparable<DataVolume> {
 
@@ -18,6 +21,15 @@ public record DataVolume(long bits) implements Comparable<DataVolume> {
   /** 1 Gbit is 1 000 000 000 bit. */
   public double gigabits() {
     return bits / 1e9;
+  }
+
+  /** This volume times a fraction, rounded down to the bit; the fraction as in {@link DataRate}. */
+  public DataVolume share(double fraction) {
+    return new DataVolume(
+        BigDecimal.valueOf(bits)
+            .multiply(BigDecimal.valueOf(fraction))
+            .setScale(0, RoundingMode.FLOOR)
+            .longValueExact());
   }
 
   @Override

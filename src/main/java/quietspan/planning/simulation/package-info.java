@@ -1,6 +1,8 @@
 /**
- * What follows from decisions: a pure function, exact to the bit and the second. {@link
- * quietspan.planning.simulation.Simulation} is the door. Judges only the data rules; the rules that
- * a written plan never breaks are kept by construction and judged by {@code check}.
+ * What follows from decisions: pauses, quiet spans and their value, what every contact carries,
+ * what every store holds, and which data rules break. A pure function of scenario, geometry,
+ * decisions and waivers; knows neither the search nor the rules of contacts and repoints. Open
+ * {@link quietspan.planning.simulation.Simulation} first; {@link
+ * quietspan.planning.simulation.Spans} is the part that needs no stores.
  */
 package quietspan.planning.simulation;
