@@ -86,7 +86,7 @@ public final class GeometryTables {
       row[3] = Decimal.fixed(sample.owltSeconds(), 6);
       row[4] = fine(sample.sepRadians());
       row[5] = fine(sample.speRadians());
-      row[6] = fine(sample.earth().azimuthRadians());
+      row[6] = fine(turned(sample.earth().azimuthRadians()));
       row[7] = fine(sample.earth().elevationRadians());
       row[8] = fine(sample.driftRadiansPerSecond() * 86_400);
       if (withStation) {
@@ -113,6 +113,11 @@ public final class GeometryTables {
           Words.degrees(each.aim().elevationCentidegrees()));
     }
     return table;
+  }
+
+  /** An azimuth in the body frame from 0 to 360 deg, as aims are given. */
+  private static double turned(double azimuthRadians) {
+    return azimuthRadians - 2 * Math.PI * Math.floor(azimuthRadians / (2 * Math.PI));
   }
 
   private static String milliseconds(quietspan.time.ClockInstant<?> instant) {

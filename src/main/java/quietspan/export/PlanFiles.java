@@ -27,7 +27,7 @@ public final class PlanFiles {
             .map(contact -> ContactClocks.of(scenario, sightLines, contact))
             .toList();
     SortedMap<String, byte[]> files = new TreeMap<>();
-    files.put(PLAN, utf8(PlanJson.write(scenario, plan)));
+    files.put(PLAN, utf8(PlanJson.write(scenario, sightLines, plan)));
     PlanTables.of(scenario, plan, clocks)
         .forEach((name, table) -> files.put("csv/" + name + ".csv", utf8(table.csv())));
     PlanCalendars.of(scenario, plan, clocks)

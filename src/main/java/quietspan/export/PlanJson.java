@@ -23,6 +23,7 @@ import quietspan.model.QuietSpan;
 import quietspan.model.RateStep;
 import quietspan.model.Repoint;
 import quietspan.model.Scenario;
+import quietspan.model.SightLines;
 import quietspan.model.StoreTrace;
 import quietspan.model.Waiver;
 import quietspan.time.Interval;
@@ -45,19 +46,43 @@ public final class PlanJson {
   }
 
   /** The whole file. */
-  public static String write(Scenario scenario, Plan plan) {
+  public static String write(Scenario scenario, SightLines sightLines, Plan plan) {
+    return written(json -> json.file(scenario, sightLines, plan));
+  }
+
+  /**
+   * What a command says of a plan: its summary, where it is, and what is to be remarked.
+   *
+   * @param folder as the user gave it
+   */
+  public static String report(String folder, Summary summary, List<String> warnings) {
+    return written(
+        json -> {
+          json.json.writeStartObject();
+          json.json.writeStringField("folder", folder);
+          json.summary(summary);
+          json.strings("warnings", warnings);
+          json.json.writeEndObject();
+        });
+  }
+
+  private interface Content {
+    void write(PlanJson json) throws IOException;
+  }
+
+  private static String written(Content content) {
     StringWriter text = new StringWriter();
     try (JsonGenerator json = new JsonFactory().createGenerator(text)) {
       json.configure(JsonGenerator.Feature.WRITE_BIGDECIMAL_AS_PLAIN, true);
       json.setPrettyPrinter(new LinePerEntry(3));
-      new PlanJson(json).file(scenario, plan);
+      content.write(new PlanJson(json));
     } catch (IOException e) {
       throw new UncheckedIOException(e);
     }
     return text.append('\n').toString();
   }
 
-  private void file(Scenario scenario, Plan plan) throws IOException {
+  private void file(Scenario scenario, SightLines sightLines, Plan plan) throws IOException {
     json.writeStartObject();
     json.writeNumberField("format", FORMAT);
     json.writeStringField("mission", plan.mission());
@@ -67,7 +92,7 @@ public final class PlanJson {
     list("repoints", plan.decisions().repoints(), this::repoint);
     list("contacts", plan.decisions().contacts(), this::contact);
     json.writeEndObject();
-    derived(scenario, plan);
+    derived(scenario, sightLines, plan);
     provenance(plan.provenance());
     json.writeEndObject();
   }
@@ -113,11 +138,7 @@ public final class PlanJson {
     }
     json.writeNumberField("contactHours", Decimal.rounded(summary.contactHours(), 4));
     json.writeNumberField("stationCostUnits", Decimal.rounded(summary.stationCostUnits(), 4));
-    json.writeArrayFieldStart("waivers");
-    for (Waiver waiver : summary.waivers()) {
-      json.writeString(Words.sentence(waiver));
-    }
-    json.writeEndArray();
+    strings("waivers", summary.waivers().stream().map(Words::sentence).toList());
     json.writeEndObject();
   }
 
@@ -125,9 +146,7 @@ public final class PlanJson {
     json.writeStringField("id", repoint.id());
     json.writeStringField("craft", repoint.craft());
     onboard("start_onboard_utc", repoint.start());
-    Aim aim = repoint.aim();
-    json.writeNumberField("aim_azimuth_deg", Words.degrees(aim.azimuthCentidegrees()));
-    json.writeNumberField("aim_elevation_deg", Words.degrees(aim.elevationCentidegrees()));
+    aim(repoint.aim());
   }
 
   private void contact(Contact contact) throws IOException {
@@ -151,7 +170,7 @@ public final class PlanJson {
     json.writeNumberField("rate_bit_s", step.rate().bitsPerSecond());
   }
 
-  private void derived(Scenario scenario, Plan plan) throws IOException {
+  private void derived(Scenario scenario, SightLines sightLines, Plan plan) throws IOException {
     Outcome outcome = plan.outcome();
     json.writeObjectFieldStart("derived");
     json.writeNumberField("science_s", outcome.scienceSeconds());
@@ -161,6 +180,7 @@ public final class PlanJson {
     list("stores", outcome.stores(), this::store);
     list("classes", outcome.classes(), this::dataClass);
     list("weeks", Week.of(scenario, plan), this::week);
+    list("end_states", EndState.of(scenario, sightLines, plan), this::endState);
     list("findings", outcome.findings(), this::finding);
     if (plan.bound().isPresent()) {
       bound(plan.bound().get());
@@ -229,6 +249,18 @@ public final class PlanJson {
     }
   }
 
+  private void endState(EndState state) throws IOException {
+    json.writeStringField("craft", state.craft());
+    aim(state.aim());
+    json.writeNumberField("fill_bit", state.fillBits());
+    onboard("earth_held_until_onboard_utc", state.earthHeldUntil());
+  }
+
+  private void aim(Aim aim) throws IOException {
+    json.writeNumberField("aim_azimuth_deg", Words.degrees(aim.azimuthCentidegrees()));
+    json.writeNumberField("aim_elevation_deg", Words.degrees(aim.elevationCentidegrees()));
+  }
+
   private void finding(Finding finding) throws IOException {
     json.writeStringField("rule", finding.rule().name());
     json.writeStringField(
@@ -267,11 +299,7 @@ public final class PlanJson {
     json.writeObjectFieldStart("provenance");
     json.writeStringField("version", provenance.version());
     list("inputs", provenance.inputs(), this::input);
-    json.writeArrayFieldStart("sources");
-    for (String source : provenance.sources()) {
-      json.writeString(source);
-    }
-    json.writeEndArray();
+    strings("sources", provenance.sources());
     json.writeNumberField("seed", provenance.seed());
     json.writeNumberField("effort", provenance.effort());
     json.writeNumberField("stepsDone", provenance.stepsDone());

@@ -10,6 +10,7 @@ import org.snakeyaml.engine.v2.nodes.Node;
 import org.snakeyaml.engine.v2.nodes.NodeTuple;
 import org.snakeyaml.engine.v2.nodes.ScalarNode;
 import org.snakeyaml.engine.v2.nodes.Tag;
+import quietspan.problem.Nearest;
 
 /** A mapping with known keys: the field table of a file, or of a part of it. */
 final class Block implements Kind<Values> {

@@ -5,6 +5,7 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
+import quietspan.problem.Nearest;
 import quietspan.time.OnboardInstant;
 import quietspan.units.Angle;
 import quietspan.units.DataRate;

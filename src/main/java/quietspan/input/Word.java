@@ -3,6 +3,7 @@ package quietspan.input;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import quietspan.problem.Nearest;
 
 /** One of a few words, each of which stands for a value. */
 final class Word<T> extends Scalar<T> {

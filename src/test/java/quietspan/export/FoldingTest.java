@@ -9,6 +9,7 @@ import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
+import quietspan.Seeds;
 
 /** RFC 5545, section 3.1: lines of at most 75 octets without their CRLF. */
 final class FoldingTest {
@@ -43,10 +44,8 @@ final class FoldingTest {
     }
   }
 
-  @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8, 9, 10})
-  void unfoldingGivesTheLineBack(long seed) throws CharacterCodingException {
-    Random random = new Random(seed);
+  @Seeds(count = 10)
+  void unfoldingGivesTheLineBack(Random random) throws CharacterCodingException {
     String[] alphabet = {"a", ":", " ", "\\n", "\u00fc", "\u4e2d", "\ud83d\ude80"};
     for (int i = 0; i < 200; i++) {
       StringBuilder line = new StringBuilder("X");

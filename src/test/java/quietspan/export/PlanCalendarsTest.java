@@ -24,9 +24,9 @@ import net.fortuna.ical4j.data.ParserException;
 import net.fortuna.ical4j.model.Calendar;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
-import org.junit.jupiter.params.ParameterizedTest;
-import org.junit.jupiter.params.provider.ValueSource;
+import quietspan.Seeds;
 import quietspan.fixture.NodeScript;
+import quietspan.fixture.PlanFixture;
 import quietspan.model.Contact;
 import quietspan.model.Decisions;
 import quietspan.model.Plan;
@@ -125,8 +125,7 @@ final class PlanCalendarsTest {
   }
 
   /** RFC 5545, 3.8.4.7: a UID is for one component only. */
-  @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8})
+  @Seeds(count = 8)
   void identifiersAreUniqueInEveryCalendar(long seed) {
     calendars(PlanFixture.legal(seed))
         .forEach(
@@ -198,8 +197,7 @@ final class PlanCalendarsTest {
   }
 
   /** RFC 5545: version, Z times, no METHOD and no ORGANIZER in what is subscribed to. */
-  @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {1, 2, 3})
+  @Seeds(count = 3)
   void filesAreValidAndPlain(long seed) throws IOException, ParserException {
     for (CalendarSheet sheet : calendars(PlanFixture.legal(seed)).values()) {
       String text = text(sheet);

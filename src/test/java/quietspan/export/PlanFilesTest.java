@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.SortedMap;
 import org.junit.jupiter.api.Test;
+import quietspan.fixture.PlanFixture;
 import quietspan.model.Plan;
 
 final class PlanFilesTest {

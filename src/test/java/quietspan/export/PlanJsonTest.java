@@ -17,6 +17,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
+import quietspan.Seeds;
+import quietspan.fixture.PlanFixture;
 import quietspan.model.Plan;
 import quietspan.problem.InputException;
 
@@ -28,11 +30,10 @@ final class PlanJsonTest {
   }
 
   private static String write(Plan plan) {
-    return PlanJson.write(PlanFixture.SCENARIO, plan);
+    return PlanJson.write(PlanFixture.SCENARIO, PlanFixture.SKY, plan);
   }
 
-  @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19, 20})
+  @Seeds
   void readingBackWhatWasWrittenChangesNothing(long seed) {
     Plan plan = PlanFixture.legal(seed);
     PlanFile read = read(write(plan));
@@ -210,8 +211,7 @@ final class PlanJsonTest {
         .hasMessageStartingWith("plan.json");
   }
 
-  @ParameterizedTest(name = "seed {0}")
-  @ValueSource(longs = {1, 2, 3, 4, 5})
+  @Seeds(count = 5)
   void brokenBytesNeverEndInAnythingButComplaints(long seed) {
     byte[] bytes = write(PlanFixture.legal(seed)).getBytes(StandardCharsets.UTF_8);
     Random random = new Random(seed);
