@@ -19,6 +19,7 @@ import picocli.CommandLine.Spec;
     versionProvider = Version.class,
     subcommands = {
       LintCommand.class,
+      PlanCommand.class,
       PassesCommand.class,
       GeometryCommand.class,
       CoverageCommand.class,
