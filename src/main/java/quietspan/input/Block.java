@@ -11,6 +11,7 @@ import org.snakeyaml.engine.v2.nodes.NodeTuple;
 import org.snakeyaml.engine.v2.nodes.ScalarNode;
 import org.snakeyaml.engine.v2.nodes.Tag;
 import quietspan.problem.Nearest;
+import quietspan.problem.Place;
 
 /** A mapping with known keys: the field table of a file, or of a part of it. */
 final class Block implements Kind<Values> {
@@ -55,9 +56,21 @@ final class Block implements Kind<Values> {
     return fields;
   }
 
-  /** The choices in words, such as {@code exactly one of mask, mask_by_azimuth}. */
-  List<String> choicesInWords() {
-    return choices.stream().map(Block::words).toList();
+  /** Whether every field that must be there, or has a default, could be read. */
+  boolean isWhole(Values values) {
+    return fields.stream()
+        .filter(field -> field.isRequired() || field.standard().isPresent())
+        .allMatch(field -> values.maybe(field).isPresent());
+  }
+
+  /**
+   * The choices that a field takes part in, such as {@code exactly one of mask, mask_by_azimuth}.
+   */
+  List<String> choicesWith(Field<?> field) {
+    return choices.stream()
+        .filter(choice -> choice.fields().contains(field))
+        .map(Block::words)
+        .toList();
   }
 
   private static String words(Choice choice) {
@@ -86,8 +99,13 @@ final class Block implements Kind<Values> {
       take(tuple, given, spot);
     }
     Map<Field<?>, Located<?>> read = new LinkedHashMap<>();
+    Map<Field<?>, Place> places = new LinkedHashMap<>();
     for (Field<?> field : fields) {
-      read(field, given.get(field.key()), spot).ifPresent(value -> read.put(field, value));
+      Node node = given.get(field.key());
+      if (node != null) {
+        places.put(field, Spot.place(node, spot.source()));
+      }
+      read(field, node, spot).ifPresent(value -> read.put(field, value));
     }
     for (Choice choice : choices) {
       long count = choice.fields().stream().filter(field -> given.containsKey(field.key())).count();
@@ -95,7 +113,7 @@ final class Block implements Kind<Values> {
         spot.refuse(count == 0 ? "lacks a choice" : "has too many choices", words(choice));
       }
     }
-    return Optional.of(new Values(spot, read));
+    return Optional.of(new Values(spot, read, places));
   }
 
   private String keysInWords() {
@@ -180,7 +198,10 @@ final class Block implements Kind<Values> {
   }
 
   private static String description(Field<?> field) {
-    return field.sentence() + field.standard().map(text -> " Default: " + text + ".").orElse("");
+    String limits = field.kind() instanceof Quantity<?> quantity ? quantity.limits() : "";
+    return field.sentence()
+        + (limits.isEmpty() ? "" : " Limits: " + limits + ".")
+        + field.standard().map(text -> " Default: " + text + ".").orElse("");
   }
 
   private static Map<String, Object> schema(Choice choice) {

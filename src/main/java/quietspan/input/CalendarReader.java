@@ -1,30 +1,16 @@
 package quietspan.input;
 
-import java.io.IOException;
-import java.io.StringReader;
-import java.time.DateTimeException;
 import java.time.Duration;
 import java.time.Instant;
 import java.time.LocalDateTime;
-import java.time.Period;
-import java.time.temporal.TemporalAmount;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.Comparator;
-import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import java.util.TreeMap;
-import java.util.TreeSet;
-import net.fortuna.ical4j.data.CalendarBuilder;
-import net.fortuna.ical4j.data.ParserException;
-import net.fortuna.ical4j.model.Recur;
-import net.fortuna.ical4j.model.TemporalAmountAdapter;
-import net.fortuna.ical4j.model.component.VTimeZone;
 
 /**
  * Turns a calendar file into occurrences in UTC. What it does not understand it refuses with the
@@ -32,333 +18,220 @@ import net.fortuna.ical4j.model.component.VTimeZone;
  */
 final class CalendarReader {
 
-  private static final Set<String> RULE_PARTS =
-      Set.of("FREQ", "INTERVAL", "COUNT", "UNTIL", "BYDAY", "BYMONTHDAY", "WKST");
-  private static final Set<String> FREQUENCIES = Set.of("DAILY", "WEEKLY", "MONTHLY");
-  private static final int MOST_OCCURRENCES = 20_000;
+  /** More than any zone moves digits against UTC. */
+  private static final Duration ZONE_SHIFT = Duration.ofDays(2);
 
   private final Source source;
   private final Instant from;
   private final Instant to;
-  private CalendarZones zones = new CalendarZones(Map.of());
+  private CalendarZones zones;
 
-  /**
-   * @param from occurrences that end before are left out
-   * @param to occurrences that begin at or after are left out
-   */
-  CalendarReader(Source source, Instant from, Instant to) {
+  private CalendarReader(Source source, Instant from, Instant to) {
     this.source = source;
     this.from = from;
     this.to = to;
   }
 
-  /** An event as written, before recurrence. */
-  private record Written(
-      CalendarPart part,
-      String uid,
-      CalendarStamp start,
-      TemporalAmount length,
-      Optional<Instant> replaces) {}
+  /**
+   * The occurrences that overlap a stretch of time, by begin.
+   *
+   * @param from occurrences that end until then are left out
+   * @param to occurrences that begin from then on are left out
+   */
+  static List<CalendarEvent> read(String text, Source source, Instant from, Instant to) {
+    return CalendarLines.read(text, source)
+        .map(calendar -> new CalendarReader(source, from, to).events(calendar))
+        .orElse(List.of());
+  }
 
-  List<CalendarEvent> read(String text) {
-    Optional<CalendarPart> calendar = CalendarLines.read(text, source);
-    if (calendar.isEmpty()) {
-      return List.of();
-    }
-    zones = zones(calendar.orElseThrow());
-    List<Written> written = new ArrayList<>();
-    for (CalendarPart part : calendar.orElseThrow().parts()) {
+  private List<CalendarEvent> events(CalendarPart calendar) {
+    expect(calendar, "VERSION", "2.0");
+    expect(calendar, "CALSCALE", "GREGORIAN");
+    expect(calendar, "METHOD", "PUBLISH");
+    zones = CalendarZones.read(calendar, source, to.plus(ZONE_SHIFT));
+    List<CalendarEntry> entries = new ArrayList<>();
+    for (CalendarPart part : calendar.parts()) {
       switch (part.name()) {
         case "VTIMEZONE" -> {}
-        case "VEVENT" -> event(part).ifPresent(written::add);
-        default -> refuse(part.line(), part.name() + " is not read here", "events: BEGIN:VEVENT");
+        case "VEVENT" -> CalendarEntry.read(part, zones, source).ifPresent(entries::add);
+        default -> source.refuse(part.line(), part.name(), "is not read here", "VEVENT");
       }
     }
-    return occurrences(written);
+    return occurrences(entries);
   }
 
-  private void refuse(int line, String what, String right) {
-    source.problems().error(source.at(line, 1), "", what, right);
-  }
-
-  private void remark(int line, String what) {
-    source.problems().warning(source.at(line, 1), "", what, "");
-  }
-
-  private CalendarZones zones(CalendarPart calendar) {
-    Map<String, CalendarZone> byId = new HashMap<>();
-    for (CalendarPart part : calendar.parts()) {
-      if (!part.name().equals("VTIMEZONE")) {
-        continue;
+  private void expect(CalendarPart calendar, String property, String value) {
+    for (CalendarLine line : calendar.all(property)) {
+      if (!line.value().strip().toUpperCase(Locale.ROOT).equals(value)) {
+        source.refuse(
+            line.line(), property, Refusal.quoted(line.value()) + " is not understood", value);
       }
-      Optional<CalendarLine> id = part.first("TZID");
-      if (id.isEmpty()) {
-        refuse(part.line(), "the VTIMEZONE has no TZID", "RFC 5545, 3.6.5");
-        continue;
-      }
-      try {
-        String whole =
-            "BEGIN:VCALENDAR\r\nVERSION:2.0\r\nPRODID:-//quietspan//zone//EN\r\n"
-                + part.text()
-                + "END:VCALENDAR\r\n";
-        VTimeZone zone =
-            new CalendarBuilder()
-                .build(new StringReader(whole))
-                .<VTimeZone>getComponent("VTIMEZONE")
-                .orElseThrow();
-        byId.put(id.orElseThrow().value(), CalendarZone.of(zone));
-      } catch (IOException | ParserException | RuntimeException broken) {
-        refuse(part.line(), "the VTIMEZONE cannot be understood", "RFC 5545, 3.6.5");
-      }
-    }
-    return new CalendarZones(byId);
-  }
-
-  private Optional<Written> event(CalendarPart part) {
-    try {
-      String uid =
-          part.first("UID")
-              .map(CalendarLine::value)
-              .filter(value -> !value.isBlank())
-              .orElseThrow(() -> new Refusal("the event has no UID", "RFC 5545, 3.8.4.7"));
-      for (String unknown : List.of("EXRULE")) {
-        if (part.first(unknown).isPresent()) {
-          throw new Refusal(unknown + " is not understood", "EXDATE");
-        }
-      }
-      if (part.all("RRULE").size() > 1) {
-        throw new Refusal("the event has several RRULE", "one at most");
-      }
-      String status = part.first("STATUS").map(CalendarLine::value).orElse("");
-      if (status.toUpperCase(Locale.ROOT).equals("CANCELLED")
-          && part.first("RECURRENCE-ID").isEmpty()) {
-        remark(part.line(), "event " + Refusal.quoted(uid) + " is CANCELLED and counts nothing");
-        return Optional.empty();
-      }
-      if (part.first("TRANSP")
-          .map(CalendarLine::value)
-          .orElse("")
-          .equalsIgnoreCase("TRANSPARENT")) {
-        remark(
-            part.line(),
-            "event " + Refusal.quoted(uid) + " is TRANSPARENT; it counts all the same");
-      }
-      CalendarLine line =
-          part.first("DTSTART")
-              .orElseThrow(() -> new Refusal("the event has no DTSTART", "RFC 5545, 3.8.2.4"));
-      CalendarStamp start = stamp(line, line.value());
-      if (start.date()) {
-        remark(line.line(), "an all-day event is taken from 00:00 UTC to 00:00 UTC");
-      }
-      Optional<Instant> replaces = Optional.empty();
-      Optional<CalendarLine> recurrence = part.first("RECURRENCE-ID");
-      if (recurrence.isPresent()) {
-        if (recurrence.orElseThrow().parameters().containsKey("RANGE")) {
-          throw new Refusal("RANGE is not understood", "one occurrence at a time");
-        }
-        replaces =
-            Optional.of(
-                stamp(recurrence.orElseThrow(), recurrence.orElseThrow().value()).instant());
-      }
-      return Optional.of(new Written(part, uid, start, length(part, start), replaces));
-    } catch (Refusal refusal) {
-      refuse(part.line(), refusal.what(), refusal.right());
-      return Optional.empty();
     }
   }
 
-  private CalendarStamp stamp(CalendarLine line, String value) throws Refusal {
-    boolean asDate = "DATE".equalsIgnoreCase(line.parameters().getOrDefault("VALUE", ""));
-    return CalendarStamp.parse(
-        value.strip(), asDate, line.parameters().getOrDefault("TZID", ""), zones);
+  /** The events of one UID: the series itself, and what stands in place of single occurrences. */
+  private static final class Series {
+    Optional<CalendarEntry> master = Optional.empty();
+    final Map<Instant, CalendarEntry> instead = new TreeMap<>();
   }
 
-  /** Days are nominal and seconds exact, as RFC 5545 3.3.6 has it. */
-  private TemporalAmount length(CalendarPart part, CalendarStamp start) throws Refusal {
-    Optional<CalendarLine> end = part.first("DTEND");
-    Optional<CalendarLine> duration = part.first("DURATION");
-    if (end.isPresent() && duration.isPresent()) {
-      throw new Refusal("the event has both DTEND and DURATION", "one of them");
-    }
-    if (end.isPresent()) {
-      CalendarStamp stop = stamp(end.orElseThrow(), end.orElseThrow().value());
-      if (stop.date() != start.date()) {
-        throw new Refusal("DTSTART and DTEND are not both dates", "the same kind of value");
+  private List<CalendarEvent> occurrences(List<CalendarEntry> entries) {
+    Map<String, Series> byUid = new LinkedHashMap<>();
+    for (CalendarEntry entry : entries) {
+      Series series = byUid.computeIfAbsent(entry.uid(), uid -> new Series());
+      boolean twice;
+      if (entry.replaces().isPresent()) {
+        twice = series.instead.putIfAbsent(entry.replaces().get().instant(), entry) != null;
+      } else {
+        twice = series.master.isPresent();
+        series.master = series.master.or(() -> Optional.of(entry));
       }
-      Duration length = Duration.between(start.instant(), stop.instant());
-      if (length.isZero() || length.isNegative()) {
-        throw new Refusal("the event ends before it begins, or at once", "DTEND after DTSTART");
-      }
-      return length;
-    }
-    if (duration.isPresent()) {
-      try {
-        TemporalAmount length =
-            TemporalAmountAdapter.parse(duration.orElseThrow().value().strip()).getDuration();
-        boolean never =
-            length instanceof Period period
-                ? period.isNegative() || period.isZero()
-                : ((Duration) length).isNegative() || ((Duration) length).isZero();
-        if (never) {
-          throw new Refusal("the DURATION is not positive", "such as PT3H");
-        }
-        return length;
-      } catch (DateTimeException | IllegalArgumentException bad) {
-        throw new Refusal(
-            Refusal.quoted(duration.orElseThrow().value()) + " is no duration", "such as PT3H");
-      }
-    }
-    if (start.date()) {
-      return Period.ofDays(1);
-    }
-    throw new Refusal("the event has no end", "DTEND or DURATION");
-  }
-
-  private List<CalendarEvent> occurrences(List<Written> written) {
-    Map<String, Written> masters = new LinkedHashMap<>();
-    Map<String, Map<Instant, Written>> replaced = new TreeMap<>();
-    for (Written one : written) {
-      if (one.replaces().isPresent()) {
-        replaced
-            .computeIfAbsent(one.uid(), key -> new TreeMap<>())
-            .put(one.replaces().orElseThrow(), one);
-      } else if (masters.putIfAbsent(one.uid(), one) != null) {
-        refuse(
-            one.part().line(),
-            "the UID " + Refusal.quoted(one.uid()) + " stands on another event as well",
-            "one UID for each event");
+      if (twice) {
+        source.refuse(
+            entry.lineOf("UID"),
+            "UID",
+            Refusal.quoted(entry.uid()) + " stands on another event as well",
+            "a UID of its own, or a RECURRENCE-ID of its own");
       }
     }
     List<CalendarEvent> found = new ArrayList<>();
-    for (Written master : masters.values()) {
-      Map<Instant, Written> others = replaced.getOrDefault(master.uid(), Map.of());
-      try {
-        boolean repeats =
-            master.part().first("RRULE").isPresent() || master.part().first("RDATE").isPresent();
-        for (CalendarStamp start : starts(master)) {
-          if (!others.containsKey(start.instant())) {
-            add(found, master, start, repeats);
-          }
-        }
-      } catch (Refusal refusal) {
-        refuse(master.part().line(), refusal.what(), refusal.right());
-      }
-    }
-    replaced.forEach(
-        (uid, others) ->
-            others.forEach(
-                (original, other) -> {
-                  if (!masters.containsKey(uid)) {
-                    remark(other.part().line(), "the event it belongs to is not in this file");
-                  }
-                  String status = other.part().first("STATUS").map(CalendarLine::value).orElse("");
-                  if (!status.equalsIgnoreCase("CANCELLED")) {
-                    add(found, other, other.start(), true);
-                  }
-                }));
+    byUid.values().forEach(series -> add(series, found));
     found.sort(Comparator.comparing(CalendarEvent::begin).thenComparing(CalendarEvent::uid));
     return found;
   }
 
-  private List<CalendarStamp> starts(Written master) throws Refusal {
-    TreeSet<LocalDateTime> digits = new TreeSet<>();
-    digits.add(master.start().local());
-    Optional<CalendarLine> rule = master.part().first("RRULE");
-    if (rule.isPresent()) {
-      digits.addAll(recurrence(rule.orElseThrow(), master.start()));
+  private void add(Series series, List<CalendarEvent> found) {
+    if (series.master.isPresent() && !counts(series.master.get())) {
+      return;
     }
+    Map<Instant, CalendarStamp> starts = series.master.map(this::starts).orElse(Map.of());
+    boolean several = series.master.filter(CalendarReader::repeats).isPresent();
+    series.instead.forEach(
+        (original, entry) -> {
+          if (series.master.isPresent() && starts.remove(original) == null && seen(original)) {
+            source.refuse(
+                entry.lineOf("RECURRENCE-ID"),
+                "RECURRENCE-ID",
+                "is no occurrence of its event",
+                "the begin of an occurrence");
+          }
+          if (counts(entry)) {
+            add(entry.at(entry.start(), true), found);
+          }
+        });
+    starts.values().forEach(start -> add(series.master.get().at(start, several), found));
+  }
+
+  private boolean seen(Instant instant) {
+    return !instant.isBefore(from) && instant.isBefore(to);
+  }
+
+  private void add(CalendarEvent event, List<CalendarEvent> found) {
+    if (event.end().isAfter(from) && event.begin().isBefore(to)) {
+      found.add(event);
+    }
+  }
+
+  /** Whether the event counts at all; says which choices were made. */
+  private boolean counts(CalendarEntry entry) {
+    String shown = "event " + Refusal.quoted(entry.uid());
+    if (entry.isCancelled()) {
+      source.remark(entry.lineOf("STATUS"), "STATUS", shown + " is cancelled and left out", "");
+      return false;
+    }
+    if (entry.isTransparent()) {
+      source.remark(
+          entry.lineOf("TRANSP"), "TRANSP", shown + " is transparent but counts all the same", "");
+    }
+    if (entry.start().date()) {
+      source.remark(
+          entry.lineOf("DTSTART"), "DTSTART", shown + " lasts whole days, taken from 0 h UTC", "");
+    }
+    return true;
+  }
+
+  private static boolean repeats(CalendarEntry entry) {
+    return entry.part().first("RRULE").isPresent() || entry.part().first("RDATE").isPresent();
+  }
+
+  /** Where the occurrences of a series begin, as far as they may matter. */
+  private Map<Instant, CalendarStamp> starts(CalendarEntry master) {
+    Map<Instant, CalendarStamp> starts = new TreeMap<>();
+    starts.put(master.start().instant(), master.start());
+    for (CalendarLine line : master.part().all("RRULE")) {
+      try {
+        for (CalendarStamp start : recurrence(line, master)) {
+          starts.put(start.instant(), start);
+        }
+      } catch (Refusal refusal) {
+        source.refuse(line.line(), "RRULE", refusal.what(), refusal.right());
+      }
+    }
+    for (CalendarStamp more : stamps(master, "RDATE")) {
+      starts.put(more.instant(), more);
+    }
+    for (CalendarLine line : master.part().all("EXDATE")) {
+      for (CalendarStamp less : stamps(master, line)) {
+        if (starts.remove(less.instant()) == null && seen(less.instant())) {
+          source.remark(line.line(), "EXDATE", "leaves out what is no occurrence", "");
+        }
+      }
+    }
+    return starts;
+  }
+
+  private List<CalendarStamp> stamps(CalendarEntry master, String property) {
+    return master.part().all(property).stream()
+        .flatMap(line -> stamps(master, line).stream())
+        .toList();
+  }
+
+  private List<CalendarStamp> stamps(CalendarEntry master, CalendarLine line) {
     List<CalendarStamp> stamps = new ArrayList<>();
-    for (LocalDateTime local : digits) {
-      stamps.add(master.start().at(local));
-    }
-    for (CalendarLine more : master.part().all("RDATE")) {
-      if ("PERIOD".equalsIgnoreCase(more.parameters().getOrDefault("VALUE", ""))) {
-        throw new Refusal("RDATE with periods is not understood", "RDATE with date-times");
-      }
-      for (String value : more.value().split(",")) {
-        stamps.add(stamp(more, value));
+    for (String value : line.value().split(",", -1)) {
+      Optional<CalendarStamp> stamp = CalendarEntry.stamp(line, value, zones, source);
+      if (stamp.isPresent() && stamp.get().date() != master.start().date()) {
+        source.refuse(
+            line.line(), line.name(), "is not the kind of value that DTSTART is", "the same kind");
+      } else {
+        stamp.ifPresent(stamps::add);
       }
     }
-    Set<Instant> left = new TreeSet<>();
-    for (CalendarLine less : master.part().all("EXDATE")) {
-      for (String value : less.value().split(",")) {
-        left.add(stamp(less, value).instant());
-      }
-    }
-    stamps.removeIf(stamp -> left.contains(stamp.instant()));
     return stamps;
   }
 
-  private List<LocalDateTime> recurrence(CalendarLine line, CalendarStamp start) throws Refusal {
-    Map<String, String> parts = new TreeMap<>();
-    for (String part : line.value().strip().toUpperCase(Locale.ROOT).split(";")) {
-      int equals = part.indexOf('=');
-      if (equals < 1 || !RULE_PARTS.contains(part.substring(0, equals))) {
-        throw new Refusal(
-            "the rule part " + Refusal.quoted(part) + " is not understood",
-            "FREQ, INTERVAL, COUNT, UNTIL, BYDAY, BYMONTHDAY, WKST");
+  private List<CalendarStamp> recurrence(CalendarLine line, CalendarEntry master) throws Refusal {
+    CalendarRule rule = CalendarRule.ofEvent(line.value());
+    CalendarStamp first = master.start();
+    if (!rule.holds(first.local())) {
+      // RFC 5545, 3.8.5.3, leaves open what such a rule means.
+      throw new Refusal("DTSTART is not an occurrence of the rule", "a DTSTART that follows it");
+    }
+    Optional<Instant> last = Optional.empty();
+    if (rule.until().isPresent()) {
+      last = Optional.of(until(rule.until().get(), first));
+    }
+    Duration reach = Duration.between(first.instant(), master.end(first)).plus(ZONE_SHIFT);
+    LocalDateTime begin = CalendarStamp.utc(from.minus(reach));
+    LocalDateTime end = CalendarStamp.utc(to.plus(ZONE_SHIFT));
+    List<CalendarStamp> stamps = new ArrayList<>();
+    for (LocalDateTime digits : rule.digits(first.local(), begin, end)) {
+      CalendarStamp stamp = first.at(digits);
+      if (last.isEmpty() || !stamp.instant().isAfter(last.get())) {
+        stamps.add(stamp);
       }
-      parts.put(part.substring(0, equals), part.substring(equals + 1));
     }
-    if (!FREQUENCIES.contains(parts.getOrDefault("FREQ", ""))) {
-      throw new Refusal(
-          "the frequency " + Refusal.quoted(parts.getOrDefault("FREQ", "")) + " is not understood",
-          "DAILY, WEEKLY or MONTHLY");
-    }
-    Instant last = to;
-    if (parts.containsKey("UNTIL")) {
-      // UNTIL is an instant, or digits of the same kind as DTSTART.
-      String until = parts.remove("UNTIL");
-      CalendarStamp stop = CalendarStamp.parse(until, start.date(), "", zones);
-      Instant inclusive = stop.instant().plusSeconds(start.date() ? 86_400 : 1);
-      last = inclusive.isBefore(last) ? inclusive : last;
-    }
-    String rule =
-        String.join(
-            ";",
-            parts.entrySet().stream().map(one -> one.getKey() + "=" + one.getValue()).toList());
-    try {
-      // Two days more on each side than any zone shifts an instant.
-      LocalDateTime end = CalendarStamp.utc(last).plusDays(2);
-      List<LocalDateTime> dates =
-          new Recur<LocalDateTime>(rule)
-              .getDates(start.local(), start.local(), end, MOST_OCCURRENCES);
-      Instant stop = last;
-      return dates.stream().filter(date -> start.at(date).instant().isBefore(stop)).toList();
-    } catch (DateTimeException | IllegalArgumentException bad) {
-      throw new Refusal(Refusal.quoted(line.value()) + " cannot be understood", "RFC 5545, 3.3.10");
-    }
+    return stamps;
   }
 
-  private void add(List<CalendarEvent> found, Written event, CalendarStamp start, boolean repeats) {
-    Instant begin = start.instant();
-    Instant end =
-        event.length() instanceof Period
-            ? start.at(start.local().plus(event.length())).instant()
-            : begin.plus(event.length());
-    if (!end.isAfter(from) || !begin.isBefore(to)) {
-      return;
+  /** The last instant of a rule: a date where DTSTART is one, else in UTC (RFC 5545, 3.3.10). */
+  private Instant until(String value, CalendarStamp first) throws Refusal {
+    boolean date = value.matches("[0-9]{8}");
+    if (date != first.date() || (!date && !value.endsWith("Z"))) {
+      throw new Refusal(
+          "UNTIL=" + value + " does not go with DTSTART",
+          first.date() ? "a date such as 20311128" : "UTC such as 20311128T235959Z");
     }
-    List<String> craft =
-        event
-            .part()
-            .first("X-QUIETSPAN-CRAFT")
-            .or(() -> event.part().first("CATEGORIES"))
-            .map(line -> Arrays.stream(line.value().split(",")).map(String::strip).toList())
-            .orElse(List.of());
-    String label =
-        event
-            .part()
-            .first("SUMMARY")
-            .map(line -> line.value().replace("\\,", ",").replace("\\;", ";").replace("\\\\", "\\"))
-            .orElse(event.uid());
-    found.add(
-        new CalendarEvent(
-            begin,
-            end,
-            repeats ? event.uid() + "/" + begin : event.uid(),
-            label,
-            craft,
-            event.part().line()));
+    return CalendarStamp.parse(value, date, "", zones).instant();
   }
 }

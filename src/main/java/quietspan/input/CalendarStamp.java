@@ -40,10 +40,8 @@ record CalendarStamp(LocalDateTime local, boolean date, CalendarZone zone) {
       }
       return new CalendarStamp(date(value).atTime(LocalTime.MIDNIGHT), true, CalendarZone.UTC);
     }
-    if (!value.matches("[0-9]{8}T[0-9]{6}Z?")) {
-      throw new Refusal(shown + " is not a date-time in whole seconds", "such as 20310901T060000Z");
-    }
     boolean utc = value.endsWith("Z");
+    LocalDateTime local = digits(utc ? value.substring(0, value.length() - 1) : value);
     if (utc && !tzid.isEmpty()) {
       throw new Refusal(shown + " has both Z and a TZID", "one of them");
     }
@@ -51,8 +49,22 @@ record CalendarStamp(LocalDateTime local, boolean date, CalendarZone zone) {
       throw new Refusal(
           shown + " is a floating time, which is no instant", "a time with Z, or with a TZID");
     }
-    LocalDateTime local = dateTime(utc ? value.substring(0, 15) : value);
     return new CalendarStamp(local, false, utc ? CalendarZone.UTC : zones.zone(tzid));
+  }
+
+  /** Digits without zone, in whole seconds. */
+  static LocalDateTime digits(String value) throws Refusal {
+    if (!value.matches("[0-9]{8}T[0-9]{6}")) {
+      throw new Refusal(
+          Refusal.quoted(value) + " is not a date-time in whole seconds",
+          "such as 20310901T060000");
+    }
+    try {
+      return LocalDateTime.parse(value, DATE_TIME);
+    } catch (DateTimeException e) {
+      throw new Refusal(
+          Refusal.quoted(value) + " is no date-time of the calendar", "such as 20310901T060000");
+    }
   }
 
   private static LocalDate date(String value) throws Refusal {
@@ -60,15 +72,6 @@ record CalendarStamp(LocalDateTime local, boolean date, CalendarZone zone) {
       return LocalDate.parse(value, DATE);
     } catch (DateTimeException e) {
       throw new Refusal(Refusal.quoted(value) + " is no date of the calendar", "such as 20310901");
-    }
-  }
-
-  private static LocalDateTime dateTime(String value) throws Refusal {
-    try {
-      return LocalDateTime.parse(value, DATE_TIME);
-    } catch (DateTimeException e) {
-      throw new Refusal(
-          Refusal.quoted(value) + " is no date-time of the calendar", "such as 20310901T060000Z");
     }
   }
 

@@ -3,13 +3,10 @@ package quietspan.input;
 import java.time.Instant;
 import java.time.LocalDateTime;
 import java.time.ZoneOffset;
+import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
-import java.util.Optional;
 import java.util.TreeSet;
-import net.fortuna.ical4j.model.component.Observance;
-import net.fortuna.ical4j.model.component.VTimeZone;
-import net.fortuna.ical4j.model.property.TzOffsetFrom;
-import net.fortuna.ical4j.model.property.TzOffsetTo;
 
 /**
  * The zone of a calendar's times: UTC, or what a VTIMEZONE of the same file says. The zone tables
@@ -17,50 +14,39 @@ import net.fortuna.ical4j.model.property.TzOffsetTo;
  */
 final class CalendarZone {
 
-  static final CalendarZone UTC = new CalendarZone(Optional.empty(), List.of(ZoneOffset.UTC));
+  static final CalendarZone UTC = new CalendarZone(ZoneOffset.UTC, List.of());
 
-  private final Optional<VTimeZone> definition;
+  /** From this instant on, this offset. */
+  record Onset(Instant from, ZoneOffset offset) {}
+
+  private final ZoneOffset before;
+  private final List<Onset> onsets;
 
   /** Every offset that occurs, the most eastern first. */
   private final List<ZoneOffset> offsets;
 
-  private CalendarZone(Optional<VTimeZone> definition, List<ZoneOffset> offsets) {
-    this.definition = definition;
-    this.offsets = offsets;
-  }
-
-  /** Fails with an unchecked exception of the library where the definition is broken. */
-  static CalendarZone of(VTimeZone definition) {
-    TreeSet<ZoneOffset> offsets = new TreeSet<>();
-    for (Observance observance : definition.getObservances()) {
-      offsets.add(to(observance));
-      offsets.add(from(observance));
-    }
-    return new CalendarZone(Optional.of(definition), List.copyOf(offsets));
-  }
-
-  private static ZoneOffset to(Observance observance) {
-    return observance.<TzOffsetTo>getRequiredProperty("TZOFFSETTO").getOffset();
-  }
-
-  private static ZoneOffset from(Observance observance) {
-    return observance.<TzOffsetFrom>getRequiredProperty("TZOFFSETFROM").getOffset();
+  /**
+   * @param before offset before the first onset
+   * @param onsets in any order
+   */
+  CalendarZone(ZoneOffset before, List<Onset> onsets) {
+    this.before = before;
+    this.onsets = new ArrayList<>(onsets);
+    this.onsets.sort(Comparator.comparing(Onset::from));
+    TreeSet<ZoneOffset> all = new TreeSet<>(List.of(before));
+    onsets.forEach(onset -> all.add(onset.offset()));
+    this.offsets = List.copyOf(all);
   }
 
   private ZoneOffset at(Instant instant) {
-    Observance observance = definition.get().getApplicableObservance(instant);
-    if (observance != null) {
-      return to(observance);
+    ZoneOffset offset = before;
+    for (Onset onset : onsets) {
+      if (onset.from().isAfter(instant)) {
+        break;
+      }
+      offset = onset.offset();
     }
-    // Before the first onset: what the earliest observance comes from.
-    return definition.get().getObservances().stream()
-        .min(java.util.Comparator.comparing(CalendarZone::onset))
-        .map(CalendarZone::from)
-        .orElse(ZoneOffset.UTC);
-  }
-
-  private static String onset(Observance observance) {
-    return observance.getRequiredProperty("DTSTART").getValue();
+    return offset;
   }
 
   /**
@@ -68,9 +54,6 @@ final class CalendarZone {
    * digits that a change of clocks leaves out with the offset before the change (RFC 5545, 3.3.5).
    */
   Instant instant(LocalDateTime local) {
-    if (definition.isEmpty()) {
-      return local.toInstant(ZoneOffset.UTC);
-    }
     // A more eastern offset makes an earlier instant, so the first that fits is the first to occur.
     for (ZoneOffset offset : offsets) {
       Instant instant = local.toInstant(offset);
@@ -78,6 +61,7 @@ final class CalendarZone {
         return instant;
       }
     }
+    // The digits are left out: the most eastern offset puts them before the change.
     return local.toInstant(at(local.toInstant(offsets.get(0))));
   }
 }

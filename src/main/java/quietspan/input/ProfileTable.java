@@ -1,73 +1,69 @@
 package quietspan.input;
 
-import java.math.BigDecimal;
-import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Map;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import quietspan.model.Profile;
 import quietspan.time.OnboardInstant;
-import quietspan.units.DataRate;
 
 /** A generation profile from a table with the header {@code from_onboard_utc,rate [kbit/s]}. */
 final class ProfileTable {
 
-  private static final Pattern HEADER =
-      Pattern.compile("from_onboard_utc,rate \\[(bit/s|kbit/s|Mbit/s|Gbit/s)\\]");
-  private static final Map<String, Integer> POWER =
-      Map.of("bit/s", 0, "kbit/s", 3, "Mbit/s", 6, "Gbit/s", 9);
+  private static final Pattern HEADER = Pattern.compile("from_onboard_utc,rate \\[([^\\]]*)\\]");
 
   private ProfileTable() {}
 
+  /** The steps; complains at each cell that cannot be taken. */
   static List<Profile.Step> read(String text, Source source) {
     String[] lines = text.split("\r\n|\n", -1);
     Matcher header = HEADER.matcher(lines[0].strip());
+    if (!header.matches() || !Quantity.RATE.symbols().contains(header.group(1))) {
+      source.refuse(
+          1,
+          "",
+          Refusal.quoted(lines[0]) + " is not the header of a profile",
+          "from_onboard_utc,rate [kbit/s], or another unit of rate");
+      return List.of();
+    }
     List<Profile.Step> steps = new ArrayList<>();
-    if (!header.matches()) {
-      source
-          .problems()
-          .error(
-              source.at(1, 1),
-              "",
-              Refusal.quoted(lines[0]) + " is not the header of a profile",
-              "from_onboard_utc,rate [kbit/s]");
-      return steps;
-    }
-    int power = POWER.get(header.group(1));
+    boolean good = true;
     for (int i = 1; i < lines.length; i++) {
-      if (lines[i].isBlank()) {
-        continue;
-      }
-      try {
-        String[] cells = lines[i].split(",", -1);
-        if (cells.length != 2) {
-          throw new Refusal("the row has " + cells.length + " cells", "an instant and a rate");
-        }
-        OnboardInstant from = Moment.ONBOARD.parse(cells[0].strip());
-        if (!Quantity.isNumber(cells[1].strip())) {
-          throw new Refusal(Refusal.quoted(cells[1]) + " is not a number", "a rate without unit");
-        }
-        BigDecimal rate = Quantity.number(cells[1].strip()).movePointRight(power);
-        if (rate.signum() < 0) {
-          throw new Refusal(Refusal.quoted(cells[1]) + " is negative", "a rate of at least 0");
-        }
-        if (!steps.isEmpty() && !steps.get(steps.size() - 1).from().isBefore(from)) {
-          throw new Refusal("the row is not later than the one before", "rising instants");
-        }
-        steps.add(
-            new Profile.Step(
-                from, new DataRate(rate.setScale(0, RoundingMode.HALF_UP).longValueExact())));
-      } catch (Refusal refusal) {
-        source.problems().error(source.at(i + 1, 1), "", refusal.what(), refusal.right());
-      } catch (ArithmeticException large) {
-        source.problems().error(source.at(i + 1, 1), "", "the rate is too large", "a real rate");
+      if (!lines[i].isBlank()) {
+        good &= add(lines[i], i + 1, header.group(1), steps, source);
       }
     }
-    if (steps.isEmpty() && !source.problems().hasErrors()) {
-      source.problems().error(source.whole(), "", "holds no rows", "at least one");
+    if (good && steps.isEmpty()) {
+      source.refuse(1, "", "the table has no rows", "at least one instant with its rate");
     }
     return steps;
+  }
+
+  private static boolean add(
+      String row, int line, String unit, List<Profile.Step> steps, Source source) {
+    int comma = row.indexOf(',');
+    if (comma < 0 || row.indexOf(',', comma + 1) >= 0) {
+      source.refuse(line, "", "the row has not two cells", "an instant and a rate");
+      return false;
+    }
+    try {
+      OnboardInstant from = Moment.ONBOARD.parse(row.substring(0, comma).strip());
+      if (!steps.isEmpty() && !steps.get(steps.size() - 1).from().isBefore(from)) {
+        source.refuse(line, "from_onboard_utc", "is not after the row before", "rising order");
+        return false;
+      }
+      String number = row.substring(comma + 1).strip();
+      try {
+        steps.add(new Profile.Step(from, Quantity.RATE.parse(number + " " + unit)));
+        return true;
+      } catch (Refusal refusal) {
+        source
+            .problems()
+            .error(source.at(line, comma + 2), "rate", refusal.what(), refusal.right());
+      }
+    } catch (Refusal refusal) {
+      source.refuse(line, "from_onboard_utc", refusal.what(), refusal.right());
+    }
+    return false;
   }
 }

@@ -13,4 +13,14 @@ record Source(String file, Problems problems) {
   Place whole() {
     return Place.wholeFile(file);
   }
+
+  /** Complains about a line. */
+  void refuse(int line, String field, String what, String right) {
+    problems.error(at(line, 1), field, what, right);
+  }
+
+  /** Says which choice was made at a line. */
+  void remark(int line, String field, String what, String right) {
+    problems.warning(at(line, 1), field, what, right);
+  }
 }

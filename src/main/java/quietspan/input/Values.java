@@ -10,10 +10,16 @@ final class Values {
 
   private final Spot spot;
   private final Map<Field<?>, Located<?>> read;
+  private final Map<Field<?>, Place> given;
 
-  Values(Spot spot, Map<Field<?>, Located<?>> read) {
+  /**
+   * @param read what could be read, defaults too
+   * @param given where the fields stand that are in the file, readable or not
+   */
+  Values(Spot spot, Map<Field<?>, Located<?>> read, Map<Field<?>, Place> given) {
     this.spot = spot;
     this.read = Map.copyOf(read);
+    this.given = Map.copyOf(given);
   }
 
   @SuppressWarnings("unchecked") // A field's value was read by the field's own kind.
@@ -37,11 +43,21 @@ final class Values {
     return maybe(field).orElse(List.of());
   }
 
-  Place place() {
-    return spot.place();
+  /** The blocks of a list that could be read. */
+  List<Values> blocks(Field<List<Located<Values>>> field) {
+    return items(field).stream().map(Located::value).toList();
   }
 
-  String path(Field<?> field) {
+  /** Whether the field stands in the file, even if it could not be read. */
+  boolean has(Field<?> field) {
+    return given.containsKey(field);
+  }
+
+  private Place place(Field<?> field) {
+    return given.getOrDefault(field, spot.place());
+  }
+
+  private String path(Field<?> field) {
     return Block.join(spot.path(), field.key());
   }
 
@@ -50,11 +66,13 @@ final class Values {
     spot.refuse(what, right);
   }
 
-  /** Complains about a field: at its value where it has one, else at the block. */
+  /** Complains about a field: at its value where it stands in the file, else at the block. */
   void refuse(Field<?> field, String what, String right) {
-    Located<?> value = read.get(field);
-    spot.source()
-        .problems()
-        .error(value == null ? place() : value.place(), path(field), what, right);
+    spot.source().problems().error(place(field), path(field), what, right);
+  }
+
+  /** Remarks upon a field. */
+  void remark(Field<?> field, String what, String right) {
+    spot.source().problems().warning(place(field), path(field), what, right);
   }
 }

@@ -9,9 +9,11 @@ import org.snakeyaml.engine.v2.events.Event;
 import org.snakeyaml.engine.v2.exceptions.MarkedYamlEngineException;
 import org.snakeyaml.engine.v2.exceptions.ReaderException;
 import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
+import org.snakeyaml.engine.v2.exceptions.YamlVersionException;
 import org.snakeyaml.engine.v2.nodes.MappingNode;
 import org.snakeyaml.engine.v2.nodes.Node;
 import org.snakeyaml.engine.v2.nodes.SequenceNode;
+import org.snakeyaml.engine.v2.nodes.Tag;
 import org.snakeyaml.engine.v2.schema.CoreSchema;
 
 /** Reads YAML 1.2 into nodes that know their line and column. */
@@ -20,15 +22,14 @@ final class YamlFile {
   private static final int DEEPEST = 30;
   private static final int MOST_ALIASES = 500;
 
-  private YamlFile() {}
+  private static final LoadSettings SETTINGS =
+      LoadSettings.builder()
+          .setSchema(new CoreSchema())
+          .setAllowDuplicateKeys(true) // complained about by the block, with their place
+          .setMaxAliasesForCollections(MOST_ALIASES)
+          .build();
 
-  private static LoadSettings settings() {
-    return LoadSettings.builder()
-        .setSchema(new CoreSchema())
-        .setAllowDuplicateKeys(true) // complained about by the block, with their place
-        .setMaxAliasesForCollections(MOST_ALIASES)
-        .build();
-  }
+  private YamlFile() {}
 
   /** The block that fills the file; complains and gives nothing when there is none. */
   static Optional<Values> read(String text, Block table, Source source) {
@@ -40,12 +41,12 @@ final class YamlFile {
       if (isTooDeep(text, source)) {
         return Optional.empty();
       }
-      Iterator<Node> documents = new Compose(settings()).composeAllFromString(text).iterator();
-      if (!documents.hasNext()) {
+      Iterator<Node> documents = new Compose(SETTINGS).composeAllFromString(text).iterator();
+      Optional<Node> first = documents.hasNext() ? Optional.of(documents.next()) : Optional.empty();
+      if (first.filter(node -> !node.getTag().equals(Tag.NULL)).isEmpty()) {
         source.problems().error(source.whole(), "", "is empty", "a YAML document");
         return Optional.empty();
       }
-      Node first = documents.next();
       if (documents.hasNext()) {
         source
             .problems()
@@ -56,7 +57,7 @@ final class YamlFile {
                 "one document in a file");
         return Optional.empty();
       }
-      return Optional.of(first);
+      return first;
     } catch (MarkedYamlEngineException e) {
       refuse(e, source);
     } catch (ReaderException e) {
@@ -69,6 +70,8 @@ final class YamlFile {
               "",
               String.format(java.util.Locale.ROOT, "holds the character U+%04X", e.getCodePoint()),
               "printable characters");
+    } catch (YamlVersionException e) {
+      source.problems().error(source.whole(), "", "asks for another version of YAML", "YAML 1.2");
     } catch (YamlEngineException e) {
       source.problems().error(source.whole(), "", "is not YAML: " + firstLine(e), "YAML 1.2");
     }
@@ -100,7 +103,7 @@ final class YamlFile {
   /** Looks before nodes are made, because nested nodes are made by recursion. */
   private static boolean isTooDeep(String text, Source source) {
     int depth = 0;
-    for (Event event : new Parse(settings()).parseString(text)) {
+    for (Event event : new Parse(SETTINGS).parseString(text)) {
       switch (event.getEventId()) {
         case MappingStart, SequenceStart -> depth++;
         case MappingEnd, SequenceEnd -> depth--;
@@ -125,7 +128,7 @@ final class YamlFile {
 
   /** A node from a text of our own, such as a default value. */
   static Node parsed(String text) {
-    return new Compose(settings())
+    return new Compose(SETTINGS)
         .composeString(text)
         .orElseThrow(() -> new IllegalArgumentException("no YAML: " + text));
   }
