@@ -14,12 +14,14 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import quietspan.Seeds;
 import quietspan.fixture.TestScenario;
-import quietspan.model.Craft;
+import quietspan.fixture.Variations;
+import quietspan.model.ContactRules;
 import quietspan.model.Dish;
 import quietspan.model.LinkBudget;
 import quietspan.model.Margins;
 import quietspan.model.RateLadder;
 import quietspan.model.Scenario;
+import quietspan.model.Station;
 import quietspan.units.Angle;
 import quietspan.units.DataRate;
 
@@ -35,18 +37,7 @@ final class LinkTest {
   }
 
   private void withRates(RateLadder rates) {
-    Craft craft = world.craft.get(0);
-    world.craft.set(
-        0,
-        new Craft(
-            craft.name(),
-            craft.orbit(),
-            craft.attitude(),
-            craft.antenna(),
-            rates,
-            craft.store(),
-            craft.crossLink(),
-            craft.generation()));
+    world.craft.set(0, Variations.withRates(world.craft.get(0), rates));
   }
 
   private void withLadder(double eirpDbw, long... rates) {
@@ -55,34 +46,20 @@ final class LinkTest {
   }
 
   private void withDish(double zenithDb, Dish.GainPoint... gains) {
-    var station = world.stations.get(0);
-    world.stations.clear();
+    Station station = world.stations.get(0);
     Dish dish = station.dishes().get(0);
-    world.stations.add(
-        new quietspan.model.Station(
-            station.name(),
-            station.latitude(),
-            station.longitude(),
-            station.altitude(),
-            station.mask(),
+    world.stations.set(
+        0,
+        Variations.withDish(
+            station,
             station.sepLimit(),
-            station.deliveryDelay(),
-            station.zone(),
-            List.of(
-                new Dish(
-                    dish.name(),
-                    List.of(gains),
-                    zenithDb,
-                    dish.lowestElevation(),
-                    dish.highestElevation(),
-                    dish.deadZones(),
-                    dish.setup(),
-                    dish.teardown(),
-                    dish.changeover(),
-                    dish.minimumContact(),
-                    dish.maximumContact(),
-                    dish.costPerHour(),
-                    dish.costPerContact()))));
+            Variations.withSight(
+                dish,
+                List.of(gains),
+                zenithDb,
+                dish.lowestElevation(),
+                dish.highestElevation(),
+                dish.deadZones())));
   }
 
   private static Dish.GainPoint gain(double elevationDegrees, double dbPerKelvin) {
@@ -227,7 +204,7 @@ final class LinkTest {
   void effectiveRateRoundsDownTwice(long rate, double overhead, double usable, long expected) {
     var rules = world.contacts;
     world.contacts =
-        new quietspan.model.ContactRules(
+        new ContactRules(
             rules.lockUp(),
             rules.rateSteps(),
             rules.relock(),

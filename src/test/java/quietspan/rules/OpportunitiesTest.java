@@ -8,13 +8,15 @@ import java.util.List;
 import java.util.Optional;
 import java.util.SplittableRandom;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import quietspan.Seeds;
 import quietspan.fixture.SyntheticSky;
 import quietspan.fixture.TestScenario;
+import quietspan.fixture.Variations;
 import quietspan.link.Link;
 import quietspan.model.Blocked;
 import quietspan.model.Calendars;
-import quietspan.model.Craft;
 import quietspan.model.Dish;
 import quietspan.model.Geometry;
 import quietspan.model.Look;
@@ -60,30 +62,16 @@ final class OpportunitiesTest {
   private static Station limited(
       Station station, double lowest, double highest, double sep, List<Dish.Sector> zones) {
     Dish dish = station.dishes().get(0);
-    return new Station(
-        station.name(),
-        station.latitude(),
-        station.longitude(),
-        station.altitude(),
-        station.mask(),
+    return Variations.withDish(
+        station,
         Angle.ofDegrees(sep),
-        station.deliveryDelay(),
-        station.zone(),
-        List.of(
-            new Dish(
-                dish.name(),
-                dish.gOverT(),
-                dish.zenithAttenuationDb(),
-                Angle.ofDegrees(lowest),
-                Angle.ofDegrees(highest),
-                zones,
-                dish.setup(),
-                dish.teardown(),
-                dish.changeover(),
-                dish.minimumContact(),
-                dish.maximumContact(),
-                dish.costPerHour(),
-                dish.costPerContact())));
+        Variations.withSight(
+            dish,
+            dish.gOverT(),
+            dish.zenithAttenuationDb(),
+            Angle.ofDegrees(lowest),
+            Angle.ofDegrees(highest),
+            zones));
   }
 
   private void block(double fromNoon, double toNoon) {
@@ -111,37 +99,17 @@ final class OpportunitiesTest {
     assertThat(found(-4 * HOUR, 4 * HOUR, 0)).containsExactly("-14400 to -900", "6300 to 14400");
   }
 
-  @Test
-  void anotherStationsOutageChangesNothing() {
-    world.calendars =
-        new Calendars(
-            List.of(
-                new Blocked(
-                    Blocked.Why.LENT,
-                    "Elsewhere",
-                    Optional.empty(),
-                    Interval.of(FlatSky.noonPlus(0), FlatSky.noonPlus(HOUR)),
-                    "lent")),
-            List.of(),
-            List.of(),
-            List.of());
-    assertThat(found(-4 * HOUR, 4 * HOUR, 0)).containsExactly("-14400 to 14400");
-  }
-
-  @Test
-  void anotherAntennasLentSlotChangesNothing() {
-    world.calendars =
-        new Calendars(
-            List.of(
-                new Blocked(
-                    Blocked.Why.LENT,
-                    "Vellmarch",
-                    Optional.of("second"),
-                    Interval.of(FlatSky.noonPlus(0), FlatSky.noonPlus(HOUR)),
-                    "lent")),
-            List.of(),
-            List.of(),
-            List.of());
+  @ParameterizedTest(name = "{0} {1}")
+  @CsvSource({"Elsewhere,", "Vellmarch, second"})
+  void whatBlocksAnotherAntennaChangesNothing(String station, String antenna) {
+    Blocked lent =
+        new Blocked(
+            Blocked.Why.LENT,
+            station,
+            Optional.ofNullable(antenna),
+            Interval.of(FlatSky.noonPlus(0), FlatSky.noonPlus(HOUR)),
+            "lent");
+    world.calendars = new Calendars(List.of(lent), List.of(), List.of(), List.of());
     assertThat(found(-4 * HOUR, 4 * HOUR, 0)).containsExactly("-14400 to 14400");
   }
 
@@ -208,18 +176,8 @@ final class OpportunitiesTest {
 
   @Test
   void whereNoRateClosesThereIsNoOpportunity() {
-    Craft craft = world.craft.get(0);
-    world.craft.set(
-        0,
-        new Craft(
-            craft.name(),
-            craft.orbit(),
-            craft.attitude(),
-            craft.antenna(),
-            new RateLadder.ByBudget(49.2, List.of(new DataRate(50_000_000))),
-            craft.store(),
-            craft.crossLink(),
-            craft.generation()));
+    RateLadder tooFast = new RateLadder.ByBudget(49.2, List.of(new DataRate(50_000_000)));
+    world.craft.set(0, Variations.withRates(world.craft.get(0), tooFast));
     assertThat(found(-2 * HOUR, 2 * HOUR, 0)).isEmpty();
   }
 

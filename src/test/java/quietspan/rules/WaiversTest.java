@@ -14,10 +14,10 @@ import org.junit.jupiter.api.Test;
 import quietspan.Seeds;
 import quietspan.fixture.SyntheticSky;
 import quietspan.fixture.TestScenario;
+import quietspan.fixture.Variations;
 import quietspan.model.Blocked;
 import quietspan.model.Calendars;
 import quietspan.model.Contact;
-import quietspan.model.Craft;
 import quietspan.model.CraftState;
 import quietspan.model.DataClass;
 import quietspan.model.DataRules;
@@ -212,7 +212,7 @@ final class WaiversTest {
   @Test
   void aCraftWithoutCrossLinkNeedsItsOwnOpportunity() {
     classes(30);
-    withoutCrossLink(1);
+    world.craft.set(1, Variations.withCrossLink(world.craft.get(1), DataRate.ZERO));
     opportunity("Merle", 1, 2);
     opportunity("Hask", 20, 21);
     opportunity("Hask", 40, 41);
@@ -222,21 +222,6 @@ final class WaiversTest {
         .extracting(Waiver::craft, Waiver::begin, Waiver::relaxedLimit)
         .containsExactly(
             tuple("Merle", at(2).minusSeconds(100), Duration.ofHours(40).plusSeconds(400)));
-  }
-
-  private void withoutCrossLink(int index) {
-    Craft craft = world.craft.get(index);
-    world.craft.set(
-        index,
-        new Craft(
-            craft.name(),
-            craft.orbit(),
-            craft.attitude(),
-            craft.antenna(),
-            craft.rates(),
-            craft.store(),
-            DataRate.ZERO,
-            craft.generation()));
   }
 
   /** What is aboard at the end is judged by its age there: from 50 h less 100 s to 72 h. */

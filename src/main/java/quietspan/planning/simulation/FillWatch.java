@@ -68,10 +68,8 @@ final class FillWatch {
     } else if (room >= 0) {
       to = 0;
     }
-    if (from > 0 || from >= to) {
-      endOver();
-    }
     if (from >= to) {
+      endOver();
       return;
     }
     if (overBitSeconds == 0) {

@@ -8,6 +8,7 @@ import java.util.Set;
 import java.util.SplittableRandom;
 import quietspan.fixture.SyntheticSky;
 import quietspan.fixture.TestScenario;
+import quietspan.fixture.Variations;
 import quietspan.model.Aim;
 import quietspan.model.Calendars;
 import quietspan.model.Contact;
@@ -84,15 +85,7 @@ final class RandomWorld {
     world.margins = new Margins(pick(1, 0.9, 0.37), pick(1, 0.8, 0.55), Angle.ZERO, Angle.ZERO);
     world.calendars = new Calendars(List.of(), List.of(), interruptions(), List.of());
     Scenario built = world.build();
-    this.scenario =
-        new Scenario(
-            built.identity(),
-            Interval.of(origin, Duration.ofSeconds(seconds)),
-            built.craft(),
-            built.stations(),
-            built.rules(),
-            built.calendars(),
-            built.start());
+    this.scenario = Variations.lasting(built, Duration.ofSeconds(seconds));
     this.sky = new SyntheticSky(scenario, random.nextDouble(1, 300), 0.98, -18);
     this.decisions = new Decisions(repoints(), contacts(rate));
     this.waivers = waivers();

@@ -20,12 +20,12 @@ import quietspan.model.StoreTrace;
 /** The simulation in jumps against the plain one, second by second. */
 final class SimulationOracleTest {
 
-  @Seeds(count = 400)
+  @Seeds(count = 250)
   void smallWorldsComeOutAsSecondBySecond(SplittableRandom random) {
     compare(new RandomWorld(random, 500 + random.nextInt(4_000)));
   }
 
-  @Seeds(count = 6)
+  @Seeds(count = 4)
   void daysComeOutAsSecondBySecond(SplittableRandom random) {
     compare(new RandomWorld(random, 86_400 * (1 + random.nextInt(2)) + random.nextInt(1_000)));
   }
