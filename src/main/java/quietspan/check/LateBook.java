@@ -20,9 +20,10 @@ import quietspan.time.OnboardInstant;
 final class LateBook implements AgeQueue.Taker {
 
   /**
-   * Successive deliveries of one class in one contact that are all late.
+   * Successive seconds of one contact that all deliver late bits of one class.
    *
    * @param image index of the contact's image
+   * @param last its last second
    * @param from end of reception of the first late bit
    * @param worstSeconds longest time beyond the limit
    */
@@ -30,11 +31,13 @@ final class LateBook implements AgeQueue.Taker {
       int image,
       Contact contact,
       DataClass dataClass,
+      long last,
       GroundInstant from,
       long bits,
       double worstSeconds) {}
 
-  private record Relaxed(int dataClass, String craft, double from, double to, double limit) {}
+  /** Bits do not know who made them, so a waiver holds for its stretch whoever it was given for. */
+  private record Relaxed(int dataClass, double from, double to, double limit) {}
 
   private final Scenario scenario;
   private final Sight sight;
@@ -48,7 +51,6 @@ final class LateBook implements AgeQueue.Taker {
   private final double[] longest;
   private final long[] late;
 
-  private String craft = "";
   private int dataClass;
   private double delivered;
   private long deliveredBits;
@@ -75,7 +77,6 @@ final class LateBook implements AgeQueue.Taker {
         relaxed.add(
             new Relaxed(
                 classes.indexOf(scenario.rules().dataClass(waiver.dataClass())),
-                waiver.craft(),
                 new OnboardInstant(waiver.begin()).secondsSince(begin),
                 new OnboardInstant(waiver.end()).secondsSince(begin),
                 Seconds.of(waiver.relaxedLimit())));
@@ -85,7 +86,6 @@ final class LateBook implements AgeQueue.Taker {
 
   /** Sends bits of one class in one second of a contact; returns how many there were. */
   long send(AgeQueue queue, int ofClass, Image image, long second, long bits) {
-    craft = image.contact().craft();
     dataClass = ofClass;
     delivered = second + 1 + light(image.craft(), second + 1) + image.deliverySeconds();
     deliveredBits = 0;
@@ -94,8 +94,8 @@ final class LateBook implements AgeQueue.Taker {
     oldestAge = Double.NEGATIVE_INFINITY;
     queue.takeOldest(bits, this);
     longest[ofClass] = Math.max(longest[ofClass], oldestAge);
-    if (deliveredBits > 0) {
-      note(image, second);
+    if (lateBits > 0) {
+      noteLate(image, second);
     }
     return deliveredBits;
   }
@@ -120,49 +120,30 @@ final class LateBook implements AgeQueue.Taker {
   private double limit(long generated) {
     double limit = limits[dataClass];
     for (Relaxed each : relaxed) {
-      if (each.dataClass == dataClass
-          && (each.craft.isEmpty() || each.craft.equals(craft))
-          && each.from <= generated
-          && generated < each.to) {
+      if (each.dataClass == dataClass && each.from <= generated && generated < each.to) {
         limit = Math.max(limit, each.limit);
       }
     }
     return limit;
   }
 
-  private void note(Image image, long second) {
+  private void noteLate(Image image, long second) {
     late[dataClass] += lateBits;
     Run before = open[image.craft()][dataClass];
-    if (before != null && before.image != image.index()) {
+    boolean goesOn = before != null && before.image == image.index() && before.last == second - 1;
+    if (before != null && !goesOn) {
       runs.add(before);
-      before = null;
     }
-    if (lateBits == 0) {
-      if (before != null) {
-        runs.add(before);
-      }
-      before = null;
-    } else if (before != null) {
-      before =
-          new Run(
-              before.image,
-              before.contact,
-              before.dataClass,
-              before.from,
-              before.bits + lateBits,
-              Math.max(before.worstSeconds, worst));
-    } else {
-      OnboardInstant sent = scenario.period().begin().plusSeconds(second + 1);
-      before =
-          new Run(
-              image.index(),
-              image.contact(),
-              classes.get(dataClass),
-              sight.ground(craft, sent),
-              lateBits,
-              worst);
-    }
-    open[image.craft()][dataClass] = before;
+    OnboardInstant sent = scenario.period().begin().plusSeconds(second + 1);
+    open[image.craft()][dataClass] =
+        new Run(
+            image.index(),
+            image.contact(),
+            classes.get(dataClass),
+            second,
+            goesOn ? before.from : sight.ground(image.contact().craft(), sent),
+            goesOn ? before.bits + lateBits : lateBits,
+            goesOn ? Math.max(before.worstSeconds, worst) : worst);
   }
 
   /**
@@ -187,8 +168,7 @@ final class LateBook implements AgeQueue.Taker {
   }
 
   /** Bits that are still aboard at the end of the period and older than their limit. */
-  long lateAboard(AgeQueue queue, String holder, int ofClass, long end) {
-    craft = holder;
+  long lateAboard(AgeQueue queue, int ofClass, long end) {
     dataClass = ofClass;
     delivered = end;
     lateBits = 0;

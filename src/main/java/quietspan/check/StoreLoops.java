@@ -253,8 +253,7 @@ final class StoreLoops {
     for (int dataClass = 0; dataClass < classCount; dataClass++) {
       long bits = 0;
       for (int craft = 0; craft < craftCount; craft++) {
-        String holder = scenario.craft().get(craft).name();
-        bits += ages.lateAboard(queues[craft][dataClass], holder, dataClass, seconds);
+        bits += ages.lateAboard(queues[craft][dataClass], dataClass, seconds);
       }
       lateAboard.add(bits);
       classes.add(

@@ -17,13 +17,13 @@ import quietspan.time.Interval;
 import quietspan.time.OnboardInstant;
 
 /**
- * How long the aims held at the end of the period keep the Earth. Looked at every 30 s, found by
- * halving between looks an hour apart: the Earth does not leave a beam and come back in an hour.
+ * How long the aims held at the end of the period keep the Earth, to the second: found by halving
+ * between looks an hour apart, for the Earth does not leave a beam and come back in an hour.
  */
 final class EndCoverage {
 
-  private static final long STEP = 30;
-  private static final long COARSE = 120;
+  private static final long STEP = 1;
+  private static final long COARSE = 3_600;
 
   private EndCoverage() {}
 
