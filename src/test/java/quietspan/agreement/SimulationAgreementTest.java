@@ -3,10 +3,14 @@ package quietspan.agreement;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import java.util.Arrays;
 import java.util.Comparator;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Random;
+import java.util.Set;
 import java.util.TreeMap;
+import org.junit.jupiter.api.Test;
 import quietspan.Seeds;
 import quietspan.check.Check;
 import quietspan.model.ContactOutcome;
@@ -41,6 +45,22 @@ final class SimulationAgreementTest {
     sameFindings(planned.findings(), checked.findings());
   }
 
+  @Test
+  void theWorldsBreakEveryDataRule() {
+    Set<RuleId> broken = EnumSet.noneOf(RuleId.class);
+    for (long seed = 1; seed <= 30; seed++) {
+      AnyWorld world = AnyWorld.of(new Random(seed));
+      Simulation.simulate(world.scenario(), world.sight(), world.decisions(), world.waivers())
+          .findings()
+          .forEach(each -> broken.add(each.rule()));
+    }
+    assertThat(broken)
+        .containsExactlyElementsOf(
+            Arrays.stream(RuleId.values())
+                .filter(each -> each.kind() == RuleId.Kind.DATA)
+                .toList());
+  }
+
   private static void sameContacts(List<ContactOutcome> planned, List<ContactOutcome> checked) {
     assertThat(checked).hasSameSizeAs(planned);
     for (int i = 0; i < planned.size(); i++) {
@@ -50,6 +70,11 @@ final class SimulationAgreementTest {
       assertThat(other.onboard()).isEqualTo(one.onboard());
       assertThat(other.capacity()).as(one.contact()).isEqualTo(one.capacity());
       assertThat(other.delivered()).as(one.contact()).isEqualTo(one.delivered());
+      if (one.longestLatencySeconds().isPresent()) {
+        assertThat(other.longestLatencySeconds().orElseThrow())
+            .as(one.contact())
+            .isCloseTo(one.longestLatencySeconds().getAsDouble(), within(1e-3));
+      }
     }
   }
 
