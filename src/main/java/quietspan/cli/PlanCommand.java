@@ -12,7 +12,6 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.Spec;
 import quietspan.export.PlanJson;
 import quietspan.export.Summary;
-import quietspan.planning.Planner;
 import quietspan.run.PlanRun;
 
 /** Plans a scenario. */
@@ -21,54 +20,62 @@ import quietspan.run.PlanRun;
     mixinStandardHelpOptions = true,
     versionProvider = Version.class,
     description = {
-      "Places repoints and contacts, proves how good the plan can be, and writes the plan folder.",
+      "Places repoints and contacts, proves how good the plan can be, checks it by every rule, and",
+      "writes the plan folder. Ends with 0 for a legal plan and 3 for a shortfall.",
       "A planning aid, not an authorisation: stations, flight director and licences decide."
     },
     footer = {
       "",
+      "Ctrl-C ends the search and delivers the best plan so far; a second one aborts.",
+      "",
       "Examples:",
       "  quietspan plan stations-demo --out plans/sallow-triad",
-      "  quietspan plan my-mission --out plans/my-mission --json",
-      "",
-      "Ends with 0 for a legal plan and 3 for a shortfall."
+      "  quietspan plan stations-demo --out /tmp/quick --effort 0 --json"
     })
 final class PlanCommand implements Callable<Integer> {
   @Spec private CommandSpec spec;
   @Mixin private SourceOptions source;
+  @Mixin private SearchOptions search;
 
   @Option(
       names = "--out",
       required = true,
       paramLabel = "DIR",
-      description = "Plan folder to write; an earlier plan there is replaced.")
-  private Path folder;
+      description = "Folder of the plan; a plan that is there is replaced as a whole.")
+  private Path out;
 
   @Option(names = "--json", description = "Print the summary as JSON.")
   private boolean json;
 
   @Override
   public Integer call() {
-    PrintWriter results = spec.commandLine().getOut();
     PrintWriter remarks = spec.commandLine().getErr();
-    AtomicBoolean stop = Interrupts.listen();
     PlanRun.Answer answer;
-    try (ProgressLine line = new ProgressLine(remarks, Terminal.present())) {
+    AtomicBoolean stop = Interrupts.listen();
+    try (ProgressLine progress = new ProgressLine(remarks, Terminal.present())) {
       answer =
           PlanRun.plan(
-              source.source(), folder, Planner.Options.DEFAULT, Version.number(), line::show, stop);
+              new PlanRun.Request(
+                  source.source(), out, search.seed(), search.effort(spec), Version.number()),
+              progress::show,
+              stop);
     }
     Summary summary = Summary.of(answer.scenario(), answer.plan());
-    if (json) {
-      results.print(PlanJson.report(folder.toString(), summary, answer.warnings()));
-    } else {
-      results.print(
-          PlanScreen.of(
-              answer.scenario(),
-              answer.plan(),
-              answer.ends(),
-              answer.warnings(),
-              Optional.of(folder.toString())));
-    }
+    PrintWriter results = spec.commandLine().getOut();
+    results.print(
+        json
+            ? PlanJson.report(out.toString(), summary, answer.warnings())
+            : Verdict.coloured(
+                spec,
+                PlanScreen.of(
+                    answer.scenario(),
+                    answer.plan(),
+                    answer.ends(),
+                    answer.warnings(),
+                    answer.assumptions(),
+                    Optional.of(out.toString())),
+                !summary.shortfall(),
+                summary.status().name()));
     results.flush();
     return summary.shortfall() ? Exit.SHORTFALL : Exit.DONE;
   }

@@ -1,9 +1,6 @@
 package quietspan.cli;
 
 import java.time.Instant;
-import java.time.LocalDate;
-import java.time.ZoneOffset;
-import java.time.format.DateTimeFormatter;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.HashMap;
@@ -18,6 +15,7 @@ import quietspan.export.Summary;
 import quietspan.export.Week;
 import quietspan.model.Bound;
 import quietspan.model.Finding;
+import quietspan.model.Margins;
 import quietspan.model.Pause;
 import quietspan.model.Plan;
 import quietspan.model.Provenance;
@@ -31,21 +29,16 @@ import quietspan.time.OnboardInstant;
 /** A plan on one screen of 80 columns, to be read in half a minute. */
 final class PlanScreen {
 
-  private static final int WIDTH = 80;
-
   /** More rows than this of one table are left to its file. */
   private static final int MOST_ROWS = 30;
 
   private static final int MOST_REMARKS = 5;
 
-  private static final DateTimeFormatter MINUTE =
-      DateTimeFormatter.ofPattern("uuuu-MM-dd HH:mm", Locale.ROOT).withZone(ZoneOffset.UTC);
-
   private final Scenario scenario;
   private final Plan plan;
   private final Summary summary;
   private final List<EndState> ends;
-  private final StringBuilder text = new StringBuilder();
+  private final Lines lines = new Lines();
 
   private PlanScreen(Scenario scenario, Plan plan, List<EndState> ends) {
     this.scenario = scenario;
@@ -58,6 +51,7 @@ final class PlanScreen {
    * The whole screen.
    *
    * @param warnings remarks upon the scenario and the plan
+   * @param assumptions what was taken for granted
    * @param folder where the files are; empty when nothing was written
    */
   static String of(
@@ -65,66 +59,47 @@ final class PlanScreen {
       Plan plan,
       List<EndState> ends,
       List<String> warnings,
+      List<String> assumptions,
       Optional<String> folder) {
-    return new PlanScreen(scenario, plan, ends).screen(warnings, folder);
+    return new PlanScreen(scenario, plan, ends).screen(warnings, assumptions, folder);
   }
 
-  private String screen(List<String> warnings, Optional<String> folder) {
+  private String screen(List<String> warnings, List<String> assumptions, Optional<String> folder) {
     verdict();
     figures();
     spans();
     weeks();
     craft();
     findings();
-    remarks("Waived: no plan could keep these limits", waivers());
-    remarks("Warnings", warnings);
-    line("");
-    folder.ifPresent(name -> line("Files in " + name + ": plan.json, csv/, calendars/"));
+    lines.list("Waived: no plan could keep these limits", waivers(), MOST_REMARKS);
+    lines.list("Warnings", warnings, MOST_REMARKS);
+    lines.list("Taken for granted", assumptions, MOST_REMARKS);
+    lines.add("");
+    folder.ifPresent(name -> lines.add("Files in " + name + ": plan.json, csv/, calendars/"));
     provenance();
-    return text.toString();
-  }
-
-  private void line(String line) {
-    text.append(line.stripTrailing()).append('\n');
-  }
-
-  private void row(String format, Object... cells) {
-    line(String.format(Locale.ROOT, format, cells));
-  }
-
-  private static String shortened(String text, int width) {
-    return text.length() <= width ? text : text.substring(0, width - 3) + "...";
+    return lines.toString();
   }
 
   private void verdict() {
     Instant begin = scenario.period().begin().utc();
-    row(
+    lines.row(
         "%s plan for %s, %s to %s on board (%s days)",
         summary.status(),
         plan.mission(),
-        date(begin),
-        date(scenario.period().end().utc()),
-        trimmed(scenario.period().seconds() / 86_400));
+        Lines.date(begin),
+        Lines.date(scenario.period().end().utc()),
+        Lines.trimmed(scenario.period().seconds() / 86_400));
     if (summary.shortfall()) {
-      line(
+      lines.add(
           noLegalPlan()
               ? "No plan could meet every rule: proved by the bound."
               : "It is not proved that no plan could meet every rule.");
     }
-    line("");
+    lines.add("");
   }
 
   private boolean noLegalPlan() {
     return plan.bound().isPresent() && summary.boundScienceSeconds().isEmpty();
-  }
-
-  private static LocalDate date(Instant instant) {
-    return LocalDate.ofInstant(instant, ZoneOffset.UTC);
-  }
-
-  private static String trimmed(double value) {
-    String text = String.format(Locale.ROOT, "%.2f", value);
-    return text.replaceAll("\\.?0+$", "");
   }
 
   private static String hours(double seconds) {
@@ -140,29 +115,40 @@ final class PlanScreen {
   }
 
   private void figures() {
-    row(
+    lines.row(
         "Science   %s of %s; %s",
         hours(summary.scienceSeconds()), hours(summary.periodSeconds()), gap());
-    row(
+    lines.row(
         "Pauses    %d with repoints; %s",
         summary.pauses(),
         summary
             .boundPauses()
             .map(least -> "no legal plan has fewer than " + least)
             .orElse("no bound on them"));
-    row(
+    lines.row(
         "Spans     longest %s, shortest inner one %s",
         hours(summary.longestQuietSpanSeconds()), hours(summary.shortestQuietSpanSeconds()));
-    row(
+    lines.row(
         "Contacts  %d, %.1f h, %.1f cost units",
         plan.outcome().contacts().size(), summary.contactHours(), summary.stationCostUnits());
-    row(
+    lines.row(
         "Data      %s Gbit lost, highest fill %.1f %%, longest latency %s",
-        trimmed(summary.lostBits() / 1e9),
+        Lines.trimmed(summary.lostBits() / 1e9),
         100 * summary.highestFillShare(),
         summary.longestLatencySeconds().isPresent()
             ? hours(summary.longestLatencySeconds().getAsDouble())
             : "none");
+    Margins margins = scenario.rules().margins();
+    lines.row(
+        "Margins   %s %% of volume, %s %% of stores, %s deg pointing%s",
+        Lines.trimmed(100 * margins.usableVolumeShare()),
+        Lines.trimmed(100 * margins.plannedFillShare()),
+        Lines.trimmed(margins.pointingAllowance().degrees()),
+        scenario
+            .rules()
+            .link()
+            .map(link -> ", " + Lines.trimmed(link.marginDb()) + " dB of link")
+            .orElse(""));
   }
 
   private String gap() {
@@ -189,17 +175,17 @@ final class PlanScreen {
   private void spans() {
     Map<Instant, Pause> pauses = new HashMap<>();
     plan.outcome().pauses().forEach(pause -> pauses.put(pause.during().begin().utc(), pause));
-    line("");
-    row("%-35s %9s %9s  %s", "Quiet spans (on board)", "hours", "counts", "ended by");
+    lines.add("");
+    lines.row("%-30s %9s %9s  %s", "Quiet spans (on board)", "hours", "counts", "ended by");
     List<QuietSpan> spans = plan.outcome().quietSpans();
     for (QuietSpan span : spans.subList(0, Math.min(spans.size(), MOST_ROWS))) {
-      row(
+      lines.row(
           "%s to %s %9.2f %9.2f  %s",
-          MINUTE.format(span.during().begin().utc()),
-          MINUTE.format(span.during().end().utc()),
+          Lines.minute(span.during().begin().utc()),
+          Lines.minuteOfYear(span.during().end().utc()),
           span.lengthSeconds() / 3600.0,
           span.valueSeconds() / 3600.0,
-          shortened(ending(span, pauses), WIDTH - 59));
+          Lines.shortened(ending(span, pauses), Lines.WIDTH - 54));
     }
     more(spans.size(), "quiet-spans");
   }
@@ -220,26 +206,26 @@ final class PlanScreen {
                 .map(Repoint::craft)
                 .distinct()
                 .collect(Collectors.joining(", "));
-    return trimmed(pause.during().seconds() / 3600) + " h " + what;
+    return Lines.trimmed(pause.during().seconds() / 3600) + " h " + what;
   }
 
   private void more(int rows, String table) {
     if (rows > MOST_ROWS) {
-      line("... and " + (rows - MOST_ROWS) + " more in csv/" + table + ".csv");
+      lines.add("... and " + (rows - MOST_ROWS) + " more in csv/" + table + ".csv");
     }
   }
 
   private void weeks() {
-    line("");
-    row(
+    lines.add("");
+    lines.row(
         "%-15s %8s %8s %8s %8s %8s %8s %8s",
         "Week from", "contacts", "hours", "made", "sent", "could", "fill %", "latency");
     List<Week> weeks = Week.of(scenario, plan);
     for (Week week : weeks.subList(0, Math.min(weeks.size(), MOST_ROWS))) {
-      row(
+      lines.row(
           "%3d %-11s %8d %8.1f %8.2f %8.2f %8.2f %8.1f %8s",
           week.number(),
-          date(week.during().begin().utc()),
+          Lines.date(week.during().begin().utc()),
           week.contacts(),
           week.contactSeconds() / 3600.0,
           week.generatedBits() / 1e9,
@@ -252,24 +238,24 @@ final class PlanScreen {
               : "");
     }
     more(weeks.size(), "weeks");
-    line("(Gbit made by all craft, sent, and what the contacts could have carried)");
+    lines.add("(Gbit made by all craft, sent, and what the contacts could have carried)");
   }
 
   private void craft() {
-    line("");
-    row("%-14s %19s %18s  %s", "At the end", "aim", "fill", "holds the Earth until");
+    lines.add("");
+    lines.row("%-14s %19s %18s  %s", "At the end", "aim", "fill", "holds the Earth until");
     for (EndState end : ends) {
       OnboardInstant until = end.earthHeldUntil();
-      row(
+      lines.row(
           "%-14s %7.2f, %6.2f deg %7.2f Gbit %3.0f %%  %s",
-          shortened(end.craft(), 14),
+          Lines.shortened(end.craft(), 14),
           end.aim().azimuthCentidegrees() / 100.0,
           end.aim().elevationCentidegrees() / 100.0,
           end.fillBits() / 1e9,
           100 * end.fillShare(),
           until.equals(scenario.period().end())
               ? "(no longer)"
-              : MINUTE.format(until.utc()) + " on board");
+              : Lines.minute(until.utc()) + " on board");
     }
   }
 
@@ -278,9 +264,9 @@ final class PlanScreen {
     for (Finding finding : plan.outcome().findings()) {
       byRule.computeIfAbsent(finding.rule(), rule -> new ArrayList<>()).add(finding);
     }
-    List<String> lines =
+    List<String> broken =
         byRule.entrySet().stream().map(entry -> finding(entry.getKey(), entry.getValue())).toList();
-    remarks("Broken rules (each in csv/findings.csv)", lines);
+    lines.list("Broken rules (each in csv/findings.csv)", broken, MOST_REMARKS);
   }
 
   private static String finding(RuleId rule, List<Finding> findings) {
@@ -291,9 +277,9 @@ final class PlanScreen {
         "%s: %d, the worst by %s %s at %s %s%s",
         rule,
         findings.size(),
-        trimmed(worst.amount()),
+        Lines.trimmed(worst.amount()),
         rule.unit().symbol(),
-        MINUTE.format(worst.at()),
+        Lines.minute(worst.at()),
         rule.clock() == RuleId.Clock.GROUND ? "ground" : "on board",
         worst.craft().isEmpty() ? "" : ", " + worst.craft());
   }
@@ -309,45 +295,17 @@ final class PlanScreen {
         waiver.rule(),
         waiver.dataClass().isEmpty() ? "" : " " + waiver.dataClass(),
         waiver.craft().isEmpty() ? "" : " " + waiver.craft(),
-        MINUTE.format(waiver.begin()),
-        MINUTE.format(waiver.end()),
-        trimmed(waiver.relaxedLimit().toSeconds() / 3600.0));
-  }
-
-  private void remarks(String title, List<String> remarks) {
-    if (remarks.isEmpty()) {
-      return;
-    }
-    line("");
-    line(title + ":");
-    for (String remark : remarks.subList(0, Math.min(remarks.size(), MOST_REMARKS))) {
-      wrapped(remark);
-    }
-    if (remarks.size() > MOST_REMARKS) {
-      line("  ... and " + (remarks.size() - MOST_REMARKS) + " more");
-    }
-  }
-
-  /** Breaks a long line at blanks; what follows is indented further. */
-  private void wrapped(String remark) {
-    StringBuilder line = new StringBuilder(" ");
-    for (String word : remark.split(" ")) {
-      if (line.length() + 1 + word.length() > WIDTH && !line.toString().isBlank()) {
-        line(line.toString());
-        line.setLength(0);
-        line.append("   ");
-      }
-      line.append(' ').append(word);
-    }
-    line(line.toString());
+        Lines.minute(waiver.begin()),
+        Lines.minute(waiver.end()),
+        Lines.trimmed(waiver.relaxedLimit().toSeconds() / 3600.0));
   }
 
   private void provenance() {
     Provenance from = plan.provenance();
-    row("Seed %d, %d of %d steps", from.seed(), from.stepsDone(), from.effort());
+    lines.row("Seed %d, %d of %d steps", from.seed(), from.stepsDone(), from.effort());
     if (from.interrupted()) {
-      row("Interrupted: --effort %d gives the same plan again", from.stepsDone());
+      lines.row("Interrupted: --effort %d gives the same plan again", from.stepsDone());
     }
-    line("Planning aid, not an authorisation.");
+    lines.add("Planning aid, not an authorisation.");
   }
 }

@@ -18,8 +18,10 @@ import picocli.CommandLine.Spec;
     mixinStandardHelpOptions = true,
     versionProvider = Version.class,
     subcommands = {
-      LintCommand.class,
       PlanCommand.class,
+      CheckCommand.class,
+      StrategiesCommand.class,
+      LintCommand.class,
       PassesCommand.class,
       GeometryCommand.class,
       CoverageCommand.class,

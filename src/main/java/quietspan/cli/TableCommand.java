@@ -37,7 +37,6 @@ abstract class TableCommand implements Callable<Integer> {
     PrintWriter remarks = spec.commandLine().getErr();
     answer.warnings().forEach(remarks::println);
     answer.sources().forEach(source -> remarks.println("# " + source));
-    remarks.println("# no refraction, no aberration; light time applied");
     remarks.flush();
     return Exit.DONE;
   }

@@ -56,6 +56,9 @@ public record EndState(
     GroundInstant last = sightLines.known(craft.name()).end();
     GroundInstant inside = sightLines.ground(craft.name(), scenario.period().end());
     GroundInstant outside = inside;
+    if (!within(sightLines, craft, aim, inside, cone)) {
+      return scenario.period().end();
+    }
     while (within(sightLines, craft, aim, outside, cone)) {
       inside = outside;
       outside = outside.plusSeconds(STEP_SECONDS);

@@ -8,6 +8,9 @@ import java.io.UncheckedIOException;
 import java.time.Instant;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
+import quietspan.check.CheckMargins;
+import quietspan.check.CheckReport;
 import quietspan.model.Aim;
 import quietspan.model.Bound;
 import quietspan.model.ClassOutcome;
@@ -64,6 +67,63 @@ public final class PlanJson {
           json.strings("warnings", warnings);
           json.json.writeEndObject();
         });
+  }
+
+  /**
+   * What the check says of a plan.
+   *
+   * @param plan as the user gave it
+   * @param scenario folder that the plan was held against
+   * @param altered inputs and waivers that are not those of the scenario
+   * @param stale derived values that do not follow from the decisions
+   */
+  public static String verdict(
+      String plan,
+      String scenario,
+      Summary summary,
+      CheckReport report,
+      List<String> altered,
+      List<String> stale) {
+    return written(
+        json -> {
+          json.json.writeStartObject();
+          json.json.writeStringField("plan", plan);
+          json.json.writeStringField("scenario", scenario);
+          json.json.writeBooleanField("passed", report.legal() && altered.isEmpty());
+          json.summary(summary);
+          json.list("findings", report.findings(), json::finding);
+          json.margins(report.margins());
+          json.strings("warnings", report.warnings());
+          json.strings("assumptions", report.assumptions());
+          json.strings("altered", altered);
+          json.strings("stale", stale);
+          json.json.writeStringField("missable", report.missable().sentence());
+          json.json.writeEndObject();
+        });
+  }
+
+  private void margins(CheckMargins margins) throws IOException {
+    json.writeObjectFieldStart("margins");
+    margin("off_pointing_deg", margins.offPointingDegrees());
+    margin("link_db", margins.linkDecibels());
+    margin("turn_round_s", margins.turnRoundSeconds());
+    margin("after_repoint_s", margins.afterRepointSeconds());
+    margin("highest_fill_percent", margins.highestFillPercent());
+    for (CheckMargins.Extreme latency : margins.longestLatencySeconds()) {
+      margin("longest_latency_s " + latency.subject(), Optional.of(latency));
+    }
+    json.writeEndObject();
+  }
+
+  private void margin(String key, Optional<CheckMargins.Extreme> extreme) throws IOException {
+    if (extreme.isPresent()) {
+      json.writeObjectFieldStart(key);
+      json.writeNumberField("value", Decimal.rounded(extreme.get().value(), 6));
+      json.writeStringField("subject", extreme.get().subject());
+      json.writeEndObject();
+    } else {
+      json.writeNullField(key);
+    }
   }
 
   private interface Content {

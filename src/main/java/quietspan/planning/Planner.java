@@ -100,8 +100,26 @@ public final class Planner {
       Options options,
       Progress progress,
       AtomicBoolean stop) {
+    return of(scenario, geometry, waivers, options, progress, stop).run();
+  }
+
+  static Planner of(
+      Scenario scenario,
+      Geometry geometry,
+      List<Waiver> waivers,
+      Options options,
+      Progress progress,
+      AtomicBoolean stop) {
     List<Opportunity> opportunities = Opportunities.of(scenario, geometry);
-    return new Planner(scenario, geometry, waivers, opportunities, options, progress, stop).run();
+    return new Planner(scenario, geometry, waivers, opportunities, options, progress, stop);
+  }
+
+  Tables tables() {
+    return tables;
+  }
+
+  Seed seed() {
+    return new Seed(tables, links, waivers, progress);
   }
 
   private Links links(List<Opportunity> opportunities) {
@@ -161,9 +179,19 @@ public final class Planner {
     CompletableFuture<Bound> bound =
         CompletableFuture.supplyAsync(
             () -> search.bound(Long.MAX_VALUE / 16, Long.MAX_VALUE / 16), Planner::daemon);
-    Seed seed = new Seed(tables, links, waivers, progress);
+    Seed seed = seed();
     Roster roster = seed.roster();
     progress.stage("contacts");
+    Filled filled = withContacts(seed, roster);
+    return new Result(filled.decisions(), filled.outcome(), bound.join(), 0, stop.get());
+  }
+
+  /** Decisions with what follows from them. */
+  record Filled(Decisions decisions, Outcome outcome) {}
+
+  /** Trims the contacts of a roster as far as the exact simulation still finds every rule kept. */
+  Filled withContacts(Seed seed, Roster first) {
+    Roster roster = first;
     Decisions decisions = decisions(roster);
     Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
     int guard = Seed.FIRST_GUARD;
@@ -182,7 +210,7 @@ public final class Planner {
       guard += 900;
       roster = seed.refilled(roster.draft(), guard);
     }
-    return new Result(decisions, outcome, bound.join(), 0, stop.get());
+    return new Filled(decisions, outcome);
   }
 
   private static void daemon(Runnable task) {

@@ -2,6 +2,7 @@ package quietspan.run;
 
 import java.nio.file.Path;
 import java.time.Instant;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import quietspan.astro.GeometryFactory;
@@ -31,12 +32,19 @@ public record Source(Path folder, Optional<Instant> issued, Optional<Path> oreki
   }
 
   Geometry geometry(Scenario scenario) {
-    return GeometryFactory.geometry(scenario, folder, orekitData);
+    return told(GeometryFactory.geometry(scenario, folder, orekitData));
   }
 
   /** With passes over another on-board interval than the period. */
   Geometry geometry(Scenario scenario, Interval<OnboardInstant> span) {
-    return GeometryFactory.geometry(scenario, folder, orekitData, span);
+    return told(GeometryFactory.geometry(scenario, folder, orekitData, span));
+  }
+
+  /** With what is left out, beside what served. */
+  private static Geometry told(Geometry geometry) {
+    List<String> sources = new ArrayList<>(geometry.sources());
+    sources.add("refraction and aberration: none; light time: applied");
+    return new Geometry(geometry.sightLines(), geometry.passes(), geometry.guardSeconds(), sources);
   }
 
   /** Complaints about craft whose trajectory is not known over all of the period. */

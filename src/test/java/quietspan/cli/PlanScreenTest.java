@@ -21,6 +21,7 @@ final class PlanScreenTest {
         plan,
         EndState.of(PlanFixture.SCENARIO, PlanFixture.SKY, plan),
         warnings,
+        List.of("No refraction."),
         Optional.of("plans/test"));
   }
 
