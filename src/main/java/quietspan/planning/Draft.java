@@ -3,6 +3,7 @@ package quietspan.planning;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import quietspan.model.Aim;
 
 /**
  * A plan in the making: immutable repoints with the holds and pauses that follow from them.
@@ -20,6 +21,14 @@ final class Draft {
   final List<int[]> pauses;
 
   Draft(Tables tables, List<Move> moves) {
+    this(tables, moves, List.of());
+  }
+
+  private Draft(Draft known, List<Move> moves) {
+    this(known.tables, moves, known.holds);
+  }
+
+  private Draft(Tables tables, List<Move> moves, List<List<Hold>> known) {
     this.tables = tables;
     this.moves =
         moves.stream()
@@ -27,28 +36,42 @@ final class Draft {
             .toList();
     this.holds = new ArrayList<>();
     for (int c = 0; c < tables.craftCount; c++) {
-      holds.add(holdsOf(c));
+      holds.add(holdsOf(c, known.isEmpty() ? List.of() : known.get(c)));
     }
     this.pauses = pauses(this.moves);
   }
 
-  private List<Hold> holdsOf(int craft) {
+  /** Other repoints; holds that stay the same are taken over. */
+  Draft with(List<Move> other) {
+    return new Draft(this, other);
+  }
+
+  private List<Hold> holdsOf(int craft, List<Hold> known) {
     List<Hold> found = new ArrayList<>();
     int from = 0;
     var aim = tables.scenario.start().of(tables.scenario.craft().get(craft).name()).aim();
     for (Move move : moves) {
       if (move.craft() == craft) {
         if (from < move.start()) {
-          found.add(new Hold(tables, craft, aim, from, move.start()));
+          found.add(hold(known, craft, aim, from, move.start()));
         }
         from = move.start() + tables.repoint[craft];
         aim = move.aim();
       }
     }
     if (from < tables.length) {
-      found.add(new Hold(tables, craft, aim, from, tables.length));
+      found.add(hold(known, craft, aim, from, tables.length));
     }
     return List.copyOf(found);
+  }
+
+  private Hold hold(List<Hold> known, int craft, Aim aim, int from, int until) {
+    for (Hold hold : known) {
+      if (hold.from == from && hold.until == until && hold.aim.equals(aim)) {
+        return hold;
+      }
+    }
+    return new Hold(tables, craft, aim, from, until);
   }
 
   private List<int[]> pauses(List<Move> sorted) {

@@ -52,6 +52,22 @@ final class Hold {
     return half > 0.1 ? 2 * half : 2 * (half + half * half * half / 6);
   }
 
+  /** Second on board in or after the hold at which the Earth is nearest to the aim. */
+  int nearest() {
+    int first = Math.max(0, from) / Tables.STEP;
+    int last = Math.min(tables.samples - 1, (Math.max(until, from) + 30 * 86_400) / Tables.STEP);
+    int best = first;
+    double least = Double.POSITIVE_INFINITY;
+    for (int i = first; i <= last; i += 12) {
+      double off = off(i);
+      if (off < least) {
+        least = off;
+        best = i;
+      }
+    }
+    return best * Tables.STEP;
+  }
+
   private List<int[]> coverage() {
     List<int[]> found = new ArrayList<>();
     double limit = tables.usable[craft] - RIM;

@@ -1,5 +1,6 @@
 package quietspan.planning;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import quietspan.model.Craft;
@@ -42,14 +43,25 @@ final class Ledger {
     }
   }
 
-  private static final class Day {
-    long[][] total;
-    int[][] head;
-    long[][][] bins;
-    long lost;
-    long late;
-    long fill;
+  /** The stores at the begin of a day, and what broke in the course of it. Never changed. */
+  private record Day(
+      long[][] total, int[][] head, long[][][] bins, long lost, long late, long fill) {
+
+    Day with(long newLost, long newLate, long newFill) {
+      return new Day(total, head, bins, newLost, newLate, newFill);
+    }
+
+    boolean broken() {
+      return lost > 0 || late > 0 || fill > 0;
+    }
+
+    long weight() {
+      return new Score(lost, late, fill, 0).weight();
+    }
   }
+
+  /** What stood in a place of the days before it was overwritten. */
+  private record Before(int place, Day day) {}
 
   private final Tables tables;
   private final int guard;
@@ -76,17 +88,32 @@ final class Ledger {
   private final long[][] sendable;
   private final int[][] contactSeconds;
   private final int[] pausedSeconds;
-  private final int[][] contactsIn;
 
   // working state
   private final long[][] total;
   private final int[][] head;
   private final long[][][] bins;
 
+  /** One more than there are days: the last is the end of the period. */
   private final Day[] days;
-  private int validDays;
-  private int dirtyFrom;
-  private int dirtyUntil;
+
+  /** Days whose contacts or pauses changed since they were gone through. */
+  private final boolean[] changed;
+
+  /** What undoes everything since the last {@link #mark}. */
+  private final List<Before> before = new ArrayList<>();
+
+  private boolean[] changedBefore;
+  private boolean begun;
+
+  /** Bits made until the begin of a step outside pauses, by craft. */
+  private final long[][] madeBefore;
+
+  /** First step after the present one at which a craft's being in contact changes, if known. */
+  private final int[] runEnd;
+
+  private final long[] held;
+  private final int[] anyContact;
   private long lost;
   private long late;
   private long fill;
@@ -130,15 +157,26 @@ final class Ledger {
     }
     this.sendable = new long[craftCount][steps + 1];
     this.contactSeconds = new int[craftCount][steps + 1];
-    this.contactsIn = new int[craftCount][steps + 1];
     this.pausedSeconds = new int[steps];
     this.total = new long[craftCount][classCount];
     this.head = new int[craftCount][classCount];
     this.bins = new long[craftCount][classCount][steps + older + 1];
-    this.days = new Day[steps / STEPS_A_DAY + 2];
-    this.validDays = 0;
-    this.dirtyFrom = 0;
-    this.dirtyUntil = steps;
+    this.days = new Day[(steps - 1) / STEPS_A_DAY + 2];
+    this.changed = new boolean[days.length];
+    this.changedBefore = changed.clone();
+    this.held = new long[craftCount];
+    this.runEnd = new int[craftCount];
+    this.anyContact = new int[steps + 1];
+    this.madeBefore = new long[craftCount][steps + 1];
+    for (int c = 0; c < craftCount; c++) {
+      for (int s = 0; s < steps; s++) {
+        long made = 0;
+        for (int k = 0; k < classCount; k++) {
+          made += rate[c][k][s] * DT;
+        }
+        madeBefore[c][s + 1] = madeBefore[c][s] + made;
+      }
+    }
   }
 
   private int olderSteps(Scenario scenario) {
@@ -241,94 +279,143 @@ final class Ledger {
       int step = s / DT;
       int until = Math.min(to, (step + 1) * DT);
       contactSeconds[craft][step] += sign * (until - s);
-      contactsIn[craft][step] += sign;
+      anyContact[step] += sign;
       sendable[craft][step] += sign * bitsPerSecond * Math.max(0, until - Math.max(s, dataFrom));
       s = until;
     }
     if (from < to) {
-      touch(Math.max(0, (from - ahead) / DT - 1), (to - 1) / DT + 1);
+      // What may be sent to a craft depends on when its contacts end, so those that lead up to this
+      // one are touched, too.
+      int first = from / DT;
+      while (first > 0 && contactSeconds[craft][first - 1] > 0) {
+        first--;
+      }
+      touch(Math.max(0, first - ahead / DT - 1), (to - 1) / DT + 1);
     }
   }
 
   private void touch(int fromStep, int untilStep) {
-    dirtyFrom = Math.min(dirtyFrom, fromStep);
-    dirtyUntil = Math.max(dirtyUntil, untilStep);
+    int last = Math.min(steps - 1, untilStep - 1) / STEPS_A_DAY;
+    for (int day = fromStep / STEPS_A_DAY; day <= last; day++) {
+      changed[day] = true;
+    }
   }
 
   // ---------------------------------------------------------------- running
 
+  /** What every data rule says. */
   Score score() {
-    if (dirtyFrom < dirtyUntil || validDays == 0) {
-      run();
+    run(false);
+    long sumLost = 0;
+    long sumLate = 0;
+    long sumFill = 0;
+    for (Day day : days) {
+      sumLost += day.lost;
+      sumLate += day.late;
+      sumFill += day.fill;
     }
+    Score end = end();
+    return new Score(sumLost, sumLate + end.late, sumFill, end.end);
+  }
+
+  /**
+   * Zero when the data rules are met; else by how much they are broken on the first day that breaks
+   * one, without a look at later days.
+   */
+  long firstBreach() {
+    int day = run(true);
+    return day < days.length - 1 ? days[day].weight() : end().weight();
+  }
+
+  /** From here on {@link #rollback} leads back to the present state. */
+  void mark() {
+    before.clear();
+    changedBefore = changed.clone();
+  }
+
+  /** Forgets everything gone through since the mark; the contacts must be as they were then. */
+  void rollback() {
+    for (int i = before.size() - 1; i >= 0; i--) {
+      days[before.get(i).place()] = before.get(i).day();
+    }
+    System.arraycopy(changedBefore, 0, changed, 0, changed.length);
+    before.clear();
+  }
+
+  private void put(int place, Day day) {
+    before.add(new Before(place, days[place]));
+    days[place] = day;
+  }
+
+  private Score end() {
+    Day end = days[days.length - 1];
     long over = 0;
-    for (int c = 0; c < craftCount; c++) {
-      over += Math.max(0, fillOf(c) - endLimit[c]);
-    }
     long aboard = 0;
     for (int c = 0; c < craftCount; c++) {
+      long sum = 0;
       for (int k = 0; k < classCount; k++) {
-        for (int bin = head[c][k]; bin < steps + older; bin++) {
-          if (steps + older - bin > ageLimit[k][bin]) {
-            aboard += bins[c][k][bin];
-          } else {
+        sum += end.total[c][k];
+        for (int i = 0; i < end.bins[c][k].length; i++) {
+          int bin = end.head[c][k] + i;
+          if (steps + older - bin <= ageLimit[k][bin]) {
             break;
           }
+          aboard += end.bins[c][k][i];
         }
       }
+      over += Math.max(0, sum - endLimit[c]);
     }
-    return new Score(lost, late + aboard, fill, over);
+    return new Score(0, aboard, 0, over);
   }
 
-  private long fillOf(int c) {
-    long sum = 0;
-    for (int k = 0; k < classCount; k++) {
-      sum += total[c][k];
-    }
-    return sum;
-  }
-
-  private void run() {
-    int day = Math.min(dirtyFrom / STEPS_A_DAY, Math.max(0, validDays - 1));
-    if (validDays == 0) {
-      day = 0;
+  /**
+   * Goes through the changed days, and on from each until the stores are as they were.
+   *
+   * @param toFirstBreach stops after the first day that breaks a rule; later ones stay changed
+   * @return the day stopped at, or the number of days
+   */
+  private int run(boolean toFirstBreach) {
+    if (!begun) {
       start();
-      days[0] = snapshot(null, 0);
-      validDays = 1;
-    } else {
-      restore(days[day], day * STEPS_A_DAY);
+      put(0, snapshot(0));
+      Arrays.fill(changed, 0, days.length - 1, true);
+      begun = true;
     }
-    int lastDay = (steps - 1) / STEPS_A_DAY;
-    int known = validDays;
-    for (int d = day; d <= lastDay; d++) {
-      int until = Math.min(steps, (d + 1) * STEPS_A_DAY);
-      for (int step = d * STEPS_A_DAY; step < until; step++) {
-        step(step);
-      }
-      int next = d + 1;
-      boolean same =
-          next < known && until >= dirtyUntil && sameAs(days[next], until) && known == lastDay + 2;
-      if (same) {
-        long moreLost = days[lastDay + 1].lost - days[next].lost;
-        long moreLate = days[lastDay + 1].late - days[next].late;
-        long moreFill = days[lastDay + 1].fill - days[next].fill;
-        long byLost = lost - days[next].lost;
-        long byLate = late - days[next].late;
-        long byFill = fill - days[next].fill;
-        for (int later = next; later <= lastDay + 1; later++) {
-          days[later].lost += byLost;
-          days[later].late += byLate;
-          days[later].fill += byFill;
+    boolean here = false;
+    for (int d = 0; d < days.length - 1; d++) {
+      if (changed[d]) {
+        if (!here) {
+          restore(days[d], d * STEPS_A_DAY);
         }
-        restore(days[lastDay + 1], steps);
-        assert lost - moreLost >= 0 && late - moreLate >= 0 && fill - moreFill >= 0;
-        break;
+        here = day(d);
       }
-      days[next] = snapshot(days[next], until);
-      validDays = Math.max(validDays, next + 1);
+      if (toFirstBreach && days[d].broken()) {
+        return d;
+      }
     }
-    dirtyFrom = Integer.MAX_VALUE;
-    dirtyUntil = 0;
+    return days.length - 1;
+  }
+
+  /** Goes through one day; says whether the stores then differ from what was known. */
+  private boolean day(int d) {
+    lost = 0;
+    late = 0;
+    fill = 0;
+    Arrays.fill(runEnd, -1);
+    int until = Math.min(steps, (d + 1) * STEPS_A_DAY);
+    for (int step = d * STEPS_A_DAY; step < until; step++) {
+      step(step);
+    }
+    put(d, days[d].with(lost, late, fill));
+    changed[d] = false;
+    boolean differs = days[d + 1] == null || !sameAs(days[d + 1], until);
+    if (differs) {
+      Day known = days[d + 1];
+      Day fresh = snapshot(until);
+      put(d + 1, known == null ? fresh : fresh.with(known.lost, known.late, known.fill));
+      changed[d + 1] = d + 1 < days.length - 1;
+    }
+    return differs;
   }
 
   private void start() {
@@ -337,52 +424,45 @@ final class Ledger {
         Arrays.fill(bins[c][k], 0);
         System.arraycopy(startBins[c][k], 0, bins[c][k], 0, older + 1);
         total[c][k] = startTotal[c][k];
+        held[c] += startTotal[c][k];
         head[c][k] = 0;
         while (head[c][k] < older && bins[c][k][head[c][k]] == 0) {
           head[c][k]++;
         }
       }
     }
-    lost = 0;
-    late = 0;
-    fill = 0;
   }
 
-  private Day snapshot(Day reuse, int step) {
-    Day day = reuse == null ? new Day() : reuse;
-    if (reuse == null) {
-      day.total = new long[craftCount][classCount];
-      day.head = new int[craftCount][classCount];
-      day.bins = new long[craftCount][classCount][];
-    }
+  private Day snapshot(int step) {
+    long[][] totals = new long[craftCount][];
+    int[][] heads = new int[craftCount][classCount];
+    long[][][] copies = new long[craftCount][classCount][];
     for (int c = 0; c < craftCount; c++) {
+      totals[c] = total[c].clone();
       for (int k = 0; k < classCount; k++) {
-        day.total[c][k] = total[c][k];
-        day.head[c][k] = Math.min(head[c][k], step + older + 1);
-        day.bins[c][k] =
+        heads[c][k] = Math.min(head[c][k], step + older + 1);
+        copies[c][k] =
             Arrays.copyOfRange(
-                bins[c][k], day.head[c][k], Math.min(bins[c][k].length, step + older + 1));
+                bins[c][k], heads[c][k], Math.min(bins[c][k].length, step + older + 1));
       }
     }
-    day.lost = lost;
-    day.late = late;
-    day.fill = fill;
-    return day;
+    return new Day(totals, heads, copies, 0, 0, 0);
   }
 
   private void restore(Day day, int step) {
     for (int c = 0; c < craftCount; c++) {
+      held[c] = 0;
       for (int k = 0; k < classCount; k++) {
+        held[c] += day.total[c][k];
         total[c][k] = day.total[c][k];
+        // Below its head a store is empty, and must be so again.
+        Arrays.fill(bins[c][k], Math.min(head[c][k], day.head[c][k]), day.head[c][k], 0);
         head[c][k] = day.head[c][k];
         System.arraycopy(day.bins[c][k], 0, bins[c][k], day.head[c][k], day.bins[c][k].length);
         Arrays.fill(
             bins[c][k], Math.min(bins[c][k].length, step + older + 1), bins[c][k].length, 0);
       }
     }
-    lost = day.lost;
-    late = day.late;
-    fill = day.fill;
   }
 
   private boolean sameAs(Day day, int step) {
@@ -416,67 +496,62 @@ final class Ledger {
         long made = rate[c][k][step] * (seconds - paused) + pausedRate[c][k][step] * paused;
         bins[c][k][bin] += made;
         total[c][k] += made;
+        held[c] += made;
       }
     }
-    int linked = crossInPauses ? seconds : seconds - paused;
-    int sink = -1;
-    int linkSeconds = 0;
-    for (int c = 0; c < craftCount && sink < 0; c++) {
-      if (contactSeconds[c][step] > 0) {
-        sink = c;
-        linkSeconds = Math.min(linked, contactSeconds[c][step]);
+    int sink = sink(step);
+    if (sink >= 0) {
+      int linked = crossInPauses ? seconds : seconds - paused;
+      if (contactSeconds[sink][step] > 0) {
+        linked = Math.min(linked, contactSeconds[sink][step]);
       }
-    }
-    if (sink < 0 && ahead > 0) {
-      int last = Math.min(steps - 1, step + ahead / DT);
-      for (int next = step + 1; next <= last && sink < 0; next++) {
-        for (int c = 0; c < craftCount && sink < 0; c++) {
-          if (contactSeconds[c][next] > 0) {
-            sink = c;
-            linkSeconds = linked;
-          }
-        }
-      }
-    }
-    if (sink >= 0 && linkSeconds > 0) {
-      long room = allowance(sink, step) - fillOf(sink);
+      long room = linked > 0 ? allowance(sink, step) - held[sink] : 0;
       for (int c = 0; c < craftCount && room > 0; c++) {
         if (c == sink || contactSeconds[c][step] > 0 || crossLink[c] == 0) {
           continue;
         }
-        long quota = Math.min(room, crossLink[c] * linkSeconds);
-        room -= forward(c, sink, quota, bin);
+        room -= forward(c, sink, Math.min(room, crossLink[c] * linked), bin);
       }
     }
     for (int c = 0; c < craftCount; c++) {
       if (sendable[c][step] > 0) {
         transmit(c, sendable[c][step], bin);
       }
-      long held = fillOf(c);
-      if (held > planned[c]) {
-        fill += held - planned[c];
+      if (held[c] > planned[c]) {
+        fill += held[c] - planned[c];
       }
-      if (held > capacity[c]) {
-        overflow(c, held - capacity[c], bin);
+      if (held[c] > capacity[c]) {
+        overflow(c, held[c] - capacity[c], bin);
       }
     }
   }
 
+  /** The craft that others send to: in contact, or next to be so soon enough; -1 for none. */
+  private int sink(int step) {
+    int last = Math.min(steps - 1, step + ahead / DT);
+    for (int next = step; next <= last; next++) {
+      if (anyContact[next] > 0) {
+        for (int c = 0; c < craftCount; c++) {
+          if (contactSeconds[c][next] > 0) {
+            return c;
+          }
+        }
+      }
+    }
+    return -1;
+  }
+
   /** Planned fill of the sink less what it will make itself until its contact ends (or begins). */
   private long allowance(int sink, int step) {
-    int next = step + 1;
-    boolean inContact = contactSeconds[sink][step] > 0;
-    long own = 0;
-    while (next < steps && next - step < 4 * STEPS_A_DAY) {
-      boolean contact = contactSeconds[sink][next] > 0;
-      if (inContact != contact) {
-        break;
+    if (runEnd[sink] <= step) {
+      boolean inContact = contactSeconds[sink][step] > 0;
+      int next = step + 1;
+      while (next < steps && contactSeconds[sink][next] > 0 == inContact) {
+        next++;
       }
-      for (int k = 0; k < classCount; k++) {
-        own += rate[sink][k][next] * DT;
-      }
-      next++;
+      runEnd[sink] = next;
     }
+    long own = madeBefore[sink][runEnd[sink]] - madeBefore[sink][Math.min(step + 1, steps)];
     return Math.max(0, planned[sink] - own);
   }
 
@@ -500,6 +575,8 @@ final class Ledger {
       }
       head[from][k] = total[from][k] == 0 ? bin + 1 : at;
     }
+    held[from] -= moved;
+    held[to] += moved;
     return moved;
   }
 
@@ -523,6 +600,7 @@ final class Ledger {
       }
       head[c][k] = total[c][k] == 0 ? bin + 1 : at;
     }
+    held[c] -= quota - left;
   }
 
   private void overflow(int c, long excess, int bin) {
@@ -534,6 +612,7 @@ final class Ledger {
         total[c][k] -= take;
         left -= take;
         lost += take;
+        held[c] -= take;
       }
     }
   }

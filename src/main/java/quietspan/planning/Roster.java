@@ -3,6 +3,7 @@ package quietspan.planning;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.TreeMap;
 import java.util.TreeSet;
 import quietspan.model.RuleId;
 import quietspan.model.Waiver;
@@ -24,6 +25,11 @@ final class Roster {
   final Tables tables;
   private final Ledger ledger;
   private final TreeSet<Use> uses = new TreeSet<>(ORDER);
+  private final TreeMap<Use, Integer> pending = new TreeMap<>(ORDER);
+
+  /** What the ledger was told last. */
+  private TreeMap<Use, Integer> told = new TreeMap<>(ORDER);
+
   private final int gapLimit;
   private final int directLimit;
   private final List<Waiver> waivers;
@@ -65,6 +71,7 @@ final class Roster {
   void draft(Draft next) {
     draft = next;
     ledger.pauses(next.pauses);
+    told.clear();
   }
 
   List<Use> uses() {
@@ -83,7 +90,14 @@ final class Roster {
     }
   }
 
+  /** What the ledger has not been told yet; what is put in and taken out again costs nothing. */
   private void book(Use use, int sign) {
+    if (pending.merge(use, sign, Integer::sum) == 0) {
+      pending.remove(use);
+    }
+  }
+
+  private void tell(Use use, int sign) {
     int begin = tables.onboardCeil(use.craft(), use.begin());
     int end = tables.onboardFloor(use.craft(), use.end());
     ledger.contact(
@@ -128,7 +142,39 @@ final class Roster {
   }
 
   Shortfall shortfall() {
+    tell();
     return new Shortfall(ledger.score(), gaps());
+  }
+
+  /**
+   * Zero when the data rules are met; else a number that says how far from it the plan is, found
+   * with as little work as can be: larger for what breaks a rule worse, but not comparable with
+   * {@link #shortfall}.
+   */
+  long firstBreach() {
+    long gap = gaps();
+    if (gap > 0) {
+      return gap * 100;
+    }
+    tell();
+    return ledger.firstBreach() / 1000 + Math.min(1, ledger.firstBreach());
+  }
+
+  /** Brings the ledger up to date; a change that was just taken back is forgotten cheaply. */
+  private void tell() {
+    boolean back = !told.isEmpty();
+    for (var one : told.entrySet()) {
+      back &= pending.getOrDefault(one.getKey(), 0) == -one.getValue();
+    }
+    if (back) {
+      told.forEach((use, sign) -> tell(use, -sign));
+      told.keySet().forEach(pending::remove);
+      ledger.rollback();
+    }
+    ledger.mark();
+    pending.forEach(this::tell);
+    told = new TreeMap<>(pending);
+    pending.clear();
   }
 
   private long gaps() {

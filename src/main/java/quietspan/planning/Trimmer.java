@@ -34,7 +34,7 @@ final class Trimmer {
     for (Use use : byPrice) {
       if (!fixed.contains(use)) {
         roster.remove(use);
-        if (roster.shortfall().weight() > allowed) {
+        if (!still()) {
           roster.add(use);
         }
       }
@@ -44,6 +44,10 @@ final class Trimmer {
         shorten(use);
       }
     }
+  }
+
+  private boolean still() {
+    return allowed == 0 ? roster.firstBreach() == 0 : roster.shortfall().weight() <= allowed;
   }
 
   /** Station cost per bit. */
@@ -69,7 +73,7 @@ final class Trimmer {
         less = new Use(use.craft(), use.antenna(), begin, end, Math.max(step, use.step()));
         roster.remove(use);
         roster.add(less);
-        if (roster.shortfall().weight() <= allowed) {
+        if (still()) {
           use = less;
           changed = true;
         } else {
