@@ -44,8 +44,22 @@ final class Ledger {
   }
 
   /** The stores at the begin of a day, and what broke in the course of it. Never changed. */
-  private record Day(
-      long[][] total, int[][] head, long[][][] bins, long lost, long late, long fill) {
+  private static final class Day {
+    final long[][] total;
+    final int[][] head;
+    final long[][][] bins;
+    final long lost;
+    final long late;
+    final long fill;
+
+    Day(long[][] total, int[][] head, long[][][] bins, long lost, long late, long fill) {
+      this.total = total;
+      this.head = head;
+      this.bins = bins;
+      this.lost = lost;
+      this.late = late;
+      this.fill = fill;
+    }
 
     Day with(long newLost, long newLate, long newFill) {
       return new Day(total, head, bins, newLost, newLate, newFill);

@@ -42,7 +42,7 @@ public final class Planner {
    * @param boundWork labels the bound may use
    */
   public record Options(long seed, long effort, long boundWork) {
-    public static final Options DEFAULT = new Options(1, 3_000, 600_000);
+    public static final Options DEFAULT = new Options(1, 1_000, 300_000);
   }
 
   /** Told what is going on; never changes what comes out. */
@@ -60,6 +60,12 @@ public final class Planner {
       Decisions decisions, Outcome outcome, Bound bound, long stepsDone, boolean interrupted) {}
 
   private static final int TRIES = 4;
+
+  /** Seconds by which the ledger grows stricter when the exact simulation does not agree. */
+  private static final int MORE_GUARD = 900;
+
+  /** Steps of the polish between two looks by the exact simulation. */
+  private static final long ROUND = 250;
 
   private final Scenario scenario;
   private final Geometry geometry;
@@ -183,34 +189,91 @@ public final class Planner {
     Roster roster = seed.roster();
     progress.stage("contacts");
     Filled filled = withContacts(seed, roster);
-    return new Result(filled.decisions(), filled.outcome(), bound.join(), 0, stop.get());
+    progress.stage("polish");
+    Polished polished = polished(seed, filled);
+    progress.stage("bound");
+    return new Result(
+        polished.filled().decisions(),
+        polished.filled().outcome(),
+        bound.join(),
+        polished.steps(),
+        stop.get());
   }
 
-  /** Decisions with what follows from them. */
-  record Filled(Decisions decisions, Outcome outcome) {}
+  /**
+   * Decisions with what follows from them, and the roster they were made from.
+   *
+   * @param guard seconds by which the ledger of the roster is stricter than the rules
+   */
+  record Filled(Decisions decisions, Outcome outcome, Roster roster, int guard) {
+    boolean better(Filled other) {
+      int findings = Integer.compare(outcome.findings().size(), other.outcome.findings().size());
+      if (findings != 0) {
+        return findings < 0;
+      }
+      return outcome.scienceSeconds() != other.outcome.scienceSeconds()
+          ? outcome.scienceSeconds() > other.outcome.scienceSeconds()
+          : outcome.stationCostUnits() < other.outcome.stationCostUnits();
+    }
+  }
+
+  private record Polished(Filled filled, long steps) {}
 
   /** Trims the contacts of a roster as far as the exact simulation still finds every rule kept. */
   Filled withContacts(Seed seed, Roster first) {
-    Roster roster = first;
-    Decisions decisions = decisions(roster);
-    Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
     int guard = Seed.FIRST_GUARD;
+    Filled best = filled(first, guard);
+    Roster roster = first;
     for (int i = 0; i < TRIES && !stop.get(); i++) {
       new Trimmer(roster, seed.fixed()).trim();
-      Decisions tried = decisions(roster);
-      Outcome played = Simulation.simulate(scenario, geometry.sightLines(), tried, waivers);
-      if (played.findings().size() <= outcome.findings().size()) {
-        decisions = tried;
-        outcome = played;
+      Filled tried = filled(roster, guard);
+      if (tried.outcome().findings().size() <= best.outcome().findings().size()) {
+        best = tried;
       }
-      if (played.findings().isEmpty()) {
+      if (tried.outcome().findings().isEmpty()) {
         break;
       }
       // The ledger's ten minutes were too coarse somewhere: again with more room.
-      guard += 900;
+      guard += MORE_GUARD;
       roster = seed.refilled(roster.draft(), guard);
     }
-    return new Filled(decisions, outcome);
+    return best;
+  }
+
+  /**
+   * Polishes in rounds, each from the best plan that the exact simulation has approved of. The
+   * rounds depend on the steps alone, so that so many steps lead to the same plan whether asked for
+   * or interrupted at.
+   */
+  private Polished polished(Seed seed, Filled first) {
+    Polish polish = new Polish(tables, links, waivers, seed.fixed());
+    Filled best = first;
+    int guard = first.guard();
+    long done = 0;
+    while (done < options.effort() && !stop.get()) {
+      Roster start = best.roster().under(guard);
+      if (best.roster().shortfall().none() && !start.shortfall().none()) {
+        // Legal, but not with so much to spare.
+        break;
+      }
+      Polish.Result result =
+          polish.polish(
+              start, guard, options.seed() + done, Math.min(ROUND, options.effort() - done), stop);
+      done += result.steps();
+      Filled tried = filled(result.roster(), guard);
+      if (tried.better(best)) {
+        best = tried;
+      } else if (tried.outcome().findings().size() > best.outcome().findings().size()) {
+        guard += MORE_GUARD;
+      }
+    }
+    return new Polished(best, done);
+  }
+
+  private Filled filled(Roster roster, int guard) {
+    Decisions decisions = decisions(roster);
+    Outcome outcome = Simulation.simulate(scenario, geometry.sightLines(), decisions, waivers);
+    return new Filled(decisions, outcome, roster.under(guard), guard);
   }
 
   private static void daemon(Runnable task) {

@@ -40,27 +40,31 @@ final class Polish {
 
   private final Tables tables;
   private final List<Waiver> waivers;
-  private final List<ContactSlot> slots = new ArrayList<>();
+  private final List<List<Links.Window>> passes;
   private final Collection<Use> fixed;
-  private final long seed;
   private final EnvironmentMode mode;
 
+  Polish(Tables tables, Links links, List<Waiver> waivers, Collection<Use> fixed) {
+    this(tables, links, waivers, fixed, EnvironmentMode.REPRODUCIBLE);
+  }
+
+  /**
+   * As above, for tests.
+   *
+   * @param mode how closely the solver looks after itself
+   */
   Polish(
       Tables tables,
       Links links,
       List<Waiver> waivers,
       Collection<Use> fixed,
-      long seed,
       EnvironmentMode mode) {
     this.tables = tables;
     this.waivers = waivers;
     this.fixed = List.copyOf(fixed);
-    this.seed = seed;
     this.mode = mode;
     this.passes = passes(links);
   }
-
-  private final List<List<Links.Window>> passes;
 
   /** Windows of one antenna that touch belong to one pass of the formation. */
   private List<List<Links.Window>> passes(Links links) {
@@ -94,13 +98,14 @@ final class Polish {
   /**
    * Polishes a plan.
    *
+   * @param seed of the draws
    * @param guard seconds by which the ledger is stricter than the rules
    * @param stop set from outside, ends with the best so far
    */
-  Result polish(Roster roster, int guard, long steps, AtomicBoolean stop) {
+  Result polish(Roster roster, int guard, long seed, long steps, AtomicBoolean stop) {
     Polishing start = start(roster, guard);
     AtomicLong done = new AtomicLong();
-    SolverConfig config = config(steps);
+    SolverConfig config = config(seed, steps);
     Solver<Polishing> solver = SolverFactory.<Polishing>create(config).buildSolver();
     ((AbstractSolver<Polishing>) solver)
         .addPhaseLifecycleListener(
@@ -120,7 +125,7 @@ final class Polish {
   }
 
   private Polishing start(Roster roster, int guard) {
-    slots.clear();
+    List<ContactSlot> slots = new ArrayList<>();
     List<Use> left = new ArrayList<>(roster.uses());
     left.removeAll(fixed);
     for (List<Links.Window> pass : passes) {
@@ -155,7 +160,7 @@ final class Polish {
                     && use.end() <= window.end());
   }
 
-  private SolverConfig config(long steps) {
+  private SolverConfig config(long seed, long steps) {
     LocalSearchPhaseConfig search = new LocalSearchPhaseConfig();
     search.setMoveSelectorConfig(
         new MoveIteratorFactoryConfig()

@@ -37,9 +37,11 @@ public final class Polishing {
   @PlanningEntityCollectionProperty private List<ContactSlot> contacts;
   @PlanningEntityCollectionProperty private List<RepointSlot> repoints;
 
+  @SuppressWarnings("unused") // read by the solver
   @ValueRangeProvider(id = USES)
   private List<Use> offeredUses = List.of();
 
+  @SuppressWarnings("unused") // read by the solver
   @ValueRangeProvider(id = MOVES)
   private List<Move> offeredMoves = List.of();
 

@@ -63,6 +63,13 @@ final class Roster {
     draft(draft);
   }
 
+  /** The same plan with a ledger that is stricter by another number of seconds. */
+  Roster under(int guard) {
+    Roster copy = new Roster(tables, waivers, draft, guard);
+    uses.forEach(copy::add);
+    return copy;
+  }
+
   Draft draft() {
     return draft;
   }
