@@ -91,7 +91,7 @@ public final class Planner {
     this.progress = progress;
     this.stop = stop;
     this.tables = Tables.of(scenario, geometry);
-    this.links = links(opportunities);
+    this.links = linksOf(opportunities);
   }
 
   /**
@@ -124,11 +124,15 @@ public final class Planner {
     return tables;
   }
 
+  Links links() {
+    return links;
+  }
+
   Seed seed() {
     return new Seed(tables, links, waivers, progress);
   }
 
-  private Links links(List<Opportunity> opportunities) {
+  private Links linksOf(List<Opportunity> opportunities) {
     List<Links.Window> windows = new ArrayList<>();
     for (Opportunity one : opportunities) {
       windows.add(
