@@ -47,7 +47,7 @@ final class SeriesBody implements CelestialBody {
 
     @Override
     public Transform getTransform(AbsoluteDate date) {
-      return new Transform(date, body.state(date));
+      return new Transform(date, body.state(date).negate());
     }
 
     @Override
