@@ -1,8 +1,12 @@
 package quietspan.astro;
 
+import java.io.IOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.hipparchus.analysis.interpolation.HermiteInterpolator;
 import org.hipparchus.geometry.euclidean.threed.Rotation;
 import org.hipparchus.geometry.euclidean.threed.Vector3D;
@@ -26,6 +30,11 @@ final class OemReader {
 
   /** States on each side of an interpolated instant. */
   private static final int NEIGHBOURS = 3;
+
+  private static final String CENTRES = "SUN or SOLAR SYSTEM BARYCENTER";
+
+  /** In both forms of the message. */
+  private static final Pattern CENTRE = Pattern.compile("CENTER_NAME\\s*[=>]\\s*([^<]*[^<\\s])");
 
   private final OrekitData data;
   private final Vsop vsop;
@@ -82,7 +91,41 @@ final class OemReader {
     }
   }
 
+  /**
+   * Refuses a centre that is not ours before the parser looks for an ephemeris of it.
+   *
+   * @throws InputException also when the file cannot be read
+   */
+  private static void knowsCentres(Path file, Orbit.Ephemeris orbit) {
+    List<String> lines;
+    try {
+      lines = Files.readAllLines(file);
+    } catch (IOException unreadable) {
+      throw refuse(orbit, "", "cannot be read", "a text file in UTF-8");
+    }
+    for (int i = 0; i < lines.size(); i++) {
+      Matcher matcher = CENTRE.matcher(lines.get(i));
+      if (matcher.find() && !isSun(matcher.group(1)) && !isBarycentre(matcher.group(1))) {
+        throw new InputException(
+            Problem.error(
+                new Place(orbit.file(), i + 1, matcher.start(1) + 1),
+                "CENTER_NAME",
+                "is " + matcher.group(1),
+                CENTRES));
+      }
+    }
+  }
+
+  private static boolean isSun(String centre) {
+    return centre.equalsIgnoreCase("SUN");
+  }
+
+  private static boolean isBarycentre(String centre) {
+    return centre.equalsIgnoreCase("SOLAR SYSTEM BARYCENTER") || centre.equalsIgnoreCase("SSB");
+  }
+
   States read(Path folder, Orbit.Ephemeris orbit) {
+    knowsCentres(folder.resolve(orbit.file()), orbit);
     Oem message;
     try {
       message =
@@ -120,11 +163,7 @@ final class OemReader {
   }
 
   private void add(List<double[]> rows, OemSegment segment, Orbit.Ephemeris orbit) {
-    String centre = segment.getMetadata().getCenter().getName().toUpperCase(java.util.Locale.ROOT);
-    boolean sun = centre.equals("SUN");
-    if (!sun && !centre.equals("SOLAR SYSTEM BARYCENTER") && !centre.equals("SSB")) {
-      throw refuse(orbit, "CENTER_NAME", "is " + centre, "SUN or SOLAR SYSTEM BARYCENTER");
-    }
+    boolean sun = isSun(segment.getMetadata().getCenter().getName());
     String frame =
         segment.getMetadata().getReferenceFrame().getName().toUpperCase(java.util.Locale.ROOT);
     Rotation rotation;
