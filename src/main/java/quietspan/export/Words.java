@@ -11,7 +11,7 @@ import quietspan.model.RuleId;
 import quietspan.model.Waiver;
 
 /** Phrases and stamps that several kinds of files share. */
-final class Words {
+public final class Words {
 
   private static final DateTimeFormatter MILLISECONDS =
       DateTimeFormatter.ofPattern("uuuu-MM-dd'T'HH:mm:ss.SSS'Z'", Locale.ROOT)
@@ -69,7 +69,7 @@ final class Words {
   }
 
   /** One line that says what is waived, where, by how much and why. */
-  static String sentence(Waiver waiver) {
+  public static String sentence(Waiver waiver) {
     StringBuilder text = new StringBuilder(waiver.rule().name());
     if (!waiver.dataClass().isEmpty()) {
       text.append(' ').append(waiver.dataClass());

@@ -2,6 +2,7 @@ package quietspan.run;
 
 import java.util.ArrayList;
 import java.util.List;
+import quietspan.export.Words;
 import quietspan.input.ScenarioReading;
 import quietspan.model.Aim;
 import quietspan.model.BodyDirection;
@@ -10,9 +11,11 @@ import quietspan.model.Geometry;
 import quietspan.model.Scenario;
 import quietspan.model.SightLines;
 import quietspan.model.Steering;
+import quietspan.model.Waiver;
 import quietspan.problem.Place;
 import quietspan.problem.Problem;
 import quietspan.problem.Problems;
+import quietspan.rules.Waivers;
 import quietspan.time.GroundInstant;
 import quietspan.time.Interval;
 import quietspan.units.Angle;
@@ -58,6 +61,13 @@ public final class LintRun {
             "cannot be aimed at the Earth from " + lost.begin() + " to " + lost.end(),
             "wider travel limits, another fixed elevation, or a wider beam");
       }
+    }
+    for (Waiver waiver : Waivers.of(scenario, geometry)) {
+      problems.warning(
+          Place.wholeFile("mission.yaml"),
+          "data",
+          "asks for what no plan can do; waived: " + Words.sentence(waiver),
+          "a station that can listen then, or a longer limit");
     }
     return new Answer(scenario, problems.warnings(), geometry.sources());
   }

@@ -13,6 +13,7 @@ import java.nio.file.Path;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import quietspan.fixture.SmallScenario;
 import quietspan.model.RuleId;
 
 /** The commands that print geometry, on the demo. */
@@ -132,6 +133,25 @@ final class GeometryCommandsTest {
     JsonNode problems = new ObjectMapper().readTree(results.toString());
     assertThat(problems.findValuesAsText("file"))
         .contains("mission.yaml", "stations.yaml", "state.yaml");
+  }
+
+  @Test
+  void lintWarnsOfWaiversAndOfAnAntennaThatLosesTheEarth(@TempDir Path folder) throws IOException {
+    Path small = SmallScenario.write(folder.resolve("small"));
+    Path mission = small.resolve("mission.yaml");
+    String text = Files.readString(mission);
+    assertThat(text).contains("gap_limit: 30 h", "{elevation: 12.9 deg}");
+    Files.writeString(
+        mission,
+        text.replace("gap_limit: 30 h", "gap_limit: 30 min")
+            .replace("{elevation: 12.9 deg}", "{elevation: 20 deg}"));
+    Path state = small.resolve("state.yaml");
+    Files.writeString(
+        state, Files.readString(state).replace("elevation: 12.90 deg", "elevation: 20 deg"));
+    assertThat(run("lint", small.toString())).isZero();
+    assertThat(results.toString().replaceAll("\\s+", " "))
+        .contains("waived: GAP from 2031-09-0")
+        .contains("craft Tovin: antenna: cannot be aimed at the Earth from 2031-09-01");
   }
 
   @Test
