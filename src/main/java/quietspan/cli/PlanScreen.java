@@ -161,6 +161,9 @@ final class PlanScreen {
     }
     long gap = summary.gapSeconds().orElseThrow();
     String most = "bound on legal plans " + hours(summary.boundScienceSeconds().orElseThrow());
+    if (!plan.outcome().findings().isEmpty()) {
+      return most + ",\n          which says nothing of a plan that breaks rules";
+    }
     if (gap == 0) {
       return most + ": proved optimal";
     }

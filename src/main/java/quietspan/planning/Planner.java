@@ -254,7 +254,9 @@ public final class Planner {
     Filled best = first;
     int guard = first.guard();
     long done = 0;
-    while (done < options.effort() && !stop.get()) {
+    // Without a single contact no beam is on the Earth, and there is nothing to begin with.
+    boolean hopeless = best.roster().uses().isEmpty();
+    while (!hopeless && done < options.effort() && !stop.get()) {
       Roster start = best.roster().under(guard);
       if (best.roster().shortfall().none() && !start.shortfall().none()) {
         // Legal, but not with so much to spare.
