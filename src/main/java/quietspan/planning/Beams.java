@@ -62,7 +62,7 @@ final class Beams {
     this.monotone = new boolean[craftCount];
     this.startLevel = new byte[craftCount][count];
     this.startLast = new int[craftCount];
-    int cells = Math.max(count, cellsOnPath);
+    int cells = known();
     this.mid = new double[craftCount][3 * cells];
     this.spread = new double[craftCount][cells];
     this.lowest = new double[craftCount][cells];
@@ -79,6 +79,11 @@ final class Beams {
       monotone[c] = isMonotone(c);
       start(c, craft, cells);
     }
+  }
+
+  /** Cells for which it is known whether an aim serves: those of the period and some after it. */
+  int known() {
+    return Math.max(count, cellsOnPath);
   }
 
   boolean reachable(int craft, int cell) {
@@ -148,7 +153,7 @@ final class Beams {
     }
     double from = axes.elevationFrom().radians();
     double to = axes.elevationTo().radians();
-    double slack = optimistic ? usable : 0;
+    double slack = optimistic ? usable + guard : 0;
     if (elevation < from - slack || elevation > to + slack) {
       return false;
     }
@@ -160,8 +165,14 @@ final class Beams {
     }
     double into = azimuth - first;
     into -= 2 * Math.PI * Math.floor(into / (2 * Math.PI));
-    double wide = optimistic ? usable / Math.max(0.05, StrictMath.cos(elevation)) : 0;
+    double wide = optimistic ? azimuthReach(usable, elevation) : 0;
     return into <= width + wide || into >= 2 * Math.PI - wide;
+  }
+
+  /** How far in azimuth an aim may lie from a direction and still hold it. */
+  private double azimuthReach(double usable, double elevation) {
+    double sine = StrictMath.sin(usable + guard) / StrictMath.cos(elevation);
+    return sine >= 1 ? Math.PI : StrictMath.asin(sine) + guard;
   }
 
   private void open(int c, Steering steering, int opened, int cells) {
@@ -181,8 +192,14 @@ final class Beams {
         if (!reachable[c][cell]) {
           off = -1;
         } else if (optimistic) {
-          boolean meets = lowest[c][cell] <= high && highest[c][cell] >= low;
-          off = meets ? Math.max(0, offFixed(c, fixed, low, high, cell) - spread[c][cell]) : -1;
+          off = -1;
+          // The Earth may come round to the same azimuths after a year.
+          for (double turn : new double[] {0, 2 * Math.PI, -2 * Math.PI}) {
+            if (lowest[c][cell] <= high + turn && highest[c][cell] >= low + turn) {
+              double nearest = offFixed(c, fixed, low + turn, high + turn, cell);
+              off = Math.max(0, nearest - spread[c][cell] - guard);
+            }
+          }
         } else {
           low = Math.max(low, lowest[c][cell]);
           high = Math.min(high, highest[c][cell]);

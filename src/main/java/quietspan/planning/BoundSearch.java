@@ -14,7 +14,7 @@ import quietspan.model.Waiver;
  * work allowed is used up. The work is counted in labels, never in seconds, so that the same
  * scenario gives the same bound.
  */
-final class BoundSearch {
+class BoundSearch {
 
   private static final int COARSE = 6 * 3600;
   private static final int[] GRIDS = {4 * 3600, 2 * 3600, 3600, 1800};
@@ -34,7 +34,7 @@ final class BoundSearch {
   BoundSearch(
       Tables tables, Links links, List<Waiver> waivers, Set<Relaxation> relaxed, long work) {
     this.tables = tables;
-    this.links = links;
+    this.links = links.unguarded();
     this.waivers = waivers;
     this.relaxed = relaxed;
     this.work = work;
@@ -66,7 +66,7 @@ final class BoundSearch {
   private Optional<Long> least(Programme.Aim aim, long known, long rise) {
     used = 0;
     int coarse = coarseGrid(tables);
-    Cells cells = new Cells(tables, links, waivers, relaxed, Cells.Shade.NONE, coarse);
+    Cells cells = cells(coarse);
     ToGo toGo = ToGo.of(cells, aim);
     long proved = toGo.whole();
     if (proved >= ToGo.NEVER) {
@@ -82,10 +82,7 @@ final class BoundSearch {
       }
     }
     for (int finer : grids) {
-      Cells fine =
-          finer == coarse
-              ? cells
-              : new Cells(tables, links, waivers, relaxed, Cells.Shade.NONE, finer);
+      Cells fine = finer == coarse ? cells : cells(finer);
       boolean found = false;
       while (!found && proved < top) {
         long cutoff = Math.min(top, proved + rise);
@@ -101,7 +98,7 @@ final class BoundSearch {
           found = true;
         } else {
           proved = cutoff;
-          if (cutoff >= top && known > top) {
+          if (!programme.cut() || (cutoff >= top && known > top)) {
             return Optional.empty();
           }
         }
@@ -113,6 +110,15 @@ final class BoundSearch {
     }
     method = describe(grid, proved >= known);
     return Optional.of(proved);
+  }
+
+  /** What the programme is told on a grid. */
+  Cells cells(int cellLength) {
+    return new Cells(tables, links, waivers, relaxed, Cells.Shade.NONE, cellLength);
+  }
+
+  Links links() {
+    return links;
   }
 
   private String describe(int grid, boolean optimal) {

@@ -9,6 +9,7 @@ import quietspan.model.CraftState;
 import quietspan.model.DataClass;
 import quietspan.model.Generation;
 import quietspan.model.Guarded;
+import quietspan.model.Profile;
 import quietspan.model.RuleId;
 import quietspan.model.Scenario;
 import quietspan.model.Waiver;
@@ -20,10 +21,12 @@ import quietspan.units.DataRate;
  * plan finds it, so that what the programme proves holds for all of them; with only the unavoidable
  * ones the answers are close to what contacts on real passes achieve.
  */
-final class Cells {
+class Cells {
 
   /**
    * An interruption that begins in a cell (seconds since the begin of the period, clipped to it).
+   *
+   * @param closeToPrevious the warm-up after the one before may be shared or lost anyway
    */
   record Stop(int begin, int end, boolean closeToPrevious) {
     int length() {
@@ -34,20 +37,24 @@ final class Cells {
   /**
    * What a repoint of some length that starts in a cell can do.
    *
-   * @param earliestStart earliest legal start in the cell
-   * @param latestStart latest legal start in the cell
+   * @param earliestStart earliest legal start in the cell, of this repoint or a shorter one
+   * @param latestStart latest legal start in the cell, of this repoint or a shorter one
+   * @param latestEnd when it ends at the latest, likewise
    * @param bestStart where it loses least
    * @param extra least science time it takes besides interruptions
    * @param merges it can belong to the pause of an interruption
    * @param joinsUntil when it merges: until when a later repoint may belong to the same pause
+   * @param crowded it could stand so near to an interruption that a warm-up is shared
    */
   record PauseOption(
       int earliestStart,
       int latestStart,
+      int latestEnd,
       int bestStart,
       int extra,
       boolean merges,
-      int joinsUntil) {}
+      int joinsUntil,
+      boolean crowded) {}
 
   /**
    * How a skeleton is kept away from what the sampled geometry promises; a bound uses {@link
@@ -94,6 +101,8 @@ final class Cells {
   private final int[] levelLengths;
   private final int[] levelOfMask;
   private final boolean movesOnce;
+  private final boolean pausesSave;
+  private final int lastKnownCell;
   private final int longestStopCells;
   private final PauseOption[][] pauses;
   private final List<List<Stop>> stops;
@@ -126,6 +135,7 @@ final class Cells {
       // A skeleton need not be the very best; comparing all openings keeps the search small.
       Arrays.fill(monotone, true);
     }
+    this.lastKnownCell = beams.known() - 1;
     this.startLevel = beams.startLevel;
     this.startLast = beams.startLast;
 
@@ -151,6 +161,10 @@ final class Cells {
             .map(since -> (int) (since.epochSecond() - tables.epoch))
             .orElse(0);
     this.stops = stops();
+    this.pausesSave =
+        scenario.craft().stream()
+            .flatMap(craft -> craft.generation().stream())
+            .anyMatch(generation -> generation.shareInPauses() < 1);
     List<DataClass> classes = scenario.rules().classes();
     this.prefixCount = classes.size();
     this.generated = new long[prefixCount][count];
@@ -160,13 +174,7 @@ final class Cells {
     this.endLimit = fillData(classes, waivers);
     this.gapLimit = new int[count];
     this.watchesGaps = fillGaps(waivers);
-    this.startGapSince =
-        scenario
-            .start()
-            .lastContactEnd()
-            .map(
-                end -> (int) (end.epochSecond() - tables.epoch - (long) tables.lightTime[0][0]) - 1)
-            .orElse(0);
+    this.startGapSince = tables.lastContactEnd - (int) Math.floor(leastLight());
 
     this.levelLengths =
         scenario.craft().stream()
@@ -204,7 +212,7 @@ final class Cells {
     int allRepoints = together;
     this.movesOnce =
         scenario.craft().stream()
-            .allMatch(craft -> craft.antenna().repointSpacing().toSeconds() >= allRepoints);
+            .allMatch(craft -> craft.antenna().repointSpacing().toSeconds() > allRepoints);
     this.pauses = new PauseOption[levelLengths.length][count];
     fillPauses(scenario.calendars().guarded());
     this.atLeast = patterns();
@@ -340,7 +348,7 @@ final class Cells {
     return LONG_AGO;
   }
 
-  /** Older spans than this are all alike. */
+  /** Older spans than this are all alike, unless something in them may be handed back. */
   int matureAge() {
     return Math.max(minimumSpan, warmUp) + longestRepoint() + cellLength;
   }
@@ -352,6 +360,11 @@ final class Cells {
   /** Whether the spacing of repoints keeps every craft from moving twice in one pause. */
   boolean movesOncePerPause() {
     return movesOnce;
+  }
+
+  /** Whether less is made in some pause than outside it. */
+  boolean pausesSave() {
+    return pausesSave;
   }
 
   int pauseLevel(int movedMask) {
@@ -378,15 +391,20 @@ final class Cells {
   }
 
   /**
-   * What interruptions that begin in a cell cost on their own: their length, and a warm-up after
-   * each.
+   * What interruptions that begin in a cell cost on their own at least, whatever is planned around
+   * them.
    */
   long stopsLoss(int cell) {
     long loss = 0;
     for (Stop stop : stops.get(cell)) {
-      loss += stop.length() + (stop.closeToPrevious() ? 0 : warmUp);
+      loss += stop.length() + (stop.closeToPrevious() ? 0 : warmUpAfter(stop.end()));
     }
     return loss;
+  }
+
+  /** The part of the warm-up of a span that begins then which lies inside the period. */
+  long warmUpAfter(int end) {
+    return Math.max(0, Math.min(warmUp, length - end));
   }
 
   /** The same for all interruptions that begin in a cell or later; zero unless asked for. */
@@ -396,6 +414,15 @@ final class Cells {
       loss += stopsLoss(i);
     }
     return loss;
+  }
+
+  /** Seconds between two instants that no interruption takes. */
+  long quietSeconds(int from, int to) {
+    long quiet = Math.max(0, to - from);
+    for (int[] stop : tables.stops) {
+      quiet -= Math.max(0, Math.min(stop[1], to) - Math.max(stop[0], from));
+    }
+    return quiet;
   }
 
   /** Seconds of interruptions that begin in [from, to), warm-ups included. */
@@ -415,13 +442,19 @@ final class Cells {
         : (pauseStart + ready + cellLength - 1) / cellLength;
   }
 
+  /** Whether the new aim of a craft may serve in the cell in which it moved. */
+  boolean availableInSameCell(int craft, int cell) {
+    return relaxed.contains(Relaxation.PAUSE_ANYWHERE)
+        && availableAfterMove(craft, cell, begin(cell)) == cell;
+  }
+
   boolean coversAfterEnd(int craft, int code, boolean start, boolean free) {
     if (tables.scenario.rules().data().endCoverage().isEmpty() || free) {
       return true;
     }
     int ahead =
         (int) tables.scenario.rules().data().endCoverage().orElseThrow().toSeconds() / cellLength;
-    int needed = count - 1 + ahead;
+    int needed = Math.min(lastKnownCell, count - 1 + ahead);
     return start ? startLast[craft] >= needed : code >= 0 && exit[craft][code] >= needed;
   }
 
@@ -474,12 +507,8 @@ final class Cells {
     int furthest = Integer.MIN_VALUE / 2;
     int begin = -1;
     int end = -1;
-    int near =
-        craftCount
-            * tables.scenario.craft().stream()
-                .mapToInt(craft -> (int) craft.antenna().repointLength().toSeconds())
-                .max()
-                .orElse(0);
+    int longest = java.util.stream.IntStream.of(tables.repoint).max().orElse(0);
+    int near = craftCount * longest + 2 * warmUp;
     for (int[] stop : tables.stops) {
       begin = stop[0];
       end = stop[1];
@@ -553,11 +582,8 @@ final class Cells {
         }
         var steps = generation.profile().steps();
         for (int k = 0; k < steps.size(); k++) {
-          int from = k == 0 ? 0 : Math.max(0, tables.second(steps.get(k).from().epochSecond()));
-          int to =
-              k + 1 == steps.size()
-                  ? length
-                  : Math.min(length, tables.second(steps.get(k + 1).from().epochSecond()));
+          int from = k == 0 ? 0 : Math.max(0, firstSecond(steps.get(k)));
+          int to = k + 1 == steps.size() ? length : Math.min(length, firstSecond(steps.get(k + 1)));
           long rate = steps.get(k).rate().bitsPerSecond();
           long paused = steps.get(k).rate().share(generation.shareInPauses()).bitsPerSecond();
           for (int s = from; s < to; s++) {
@@ -570,6 +596,19 @@ final class Cells {
       total[s + 1] += total[s];
     }
     return total;
+  }
+
+  /** First second in which a step of a profile holds: they change on whole seconds. */
+  private int firstSecond(Profile.Step step) {
+    return tables.second(step.from().ceilToSecond().epochSecond());
+  }
+
+  private double leastLight() {
+    return Arrays.stream(tables.lightTime).flatMapToDouble(Arrays::stream).min().orElse(0);
+  }
+
+  private double mostLight() {
+    return Arrays.stream(tables.lightTime).flatMapToDouble(Arrays::stream).max().orElse(0);
   }
 
   /** The most bits of a class that may still be aboard at a second without being late. */
@@ -593,7 +632,8 @@ final class Cells {
     for (int c = 0; c < craftCount; c++) {
       quickest = Math.min(quickest, tables.lightTime[c][sample]);
     }
-    allowed -= (long) Math.floor(quickest) - 1;
+    // At the end of the period, what is aboard is judged by its age alone.
+    allowed -= at >= length ? -1 : (long) Math.floor(quickest) - 1;
     if (allowed < 0) {
       allowed = 0;
     }
@@ -640,13 +680,13 @@ final class Cells {
           int relaxed = (int) waiver.relaxedLimit().toSeconds();
           int from = tables.second(waiver.begin().getEpochSecond());
           int to = tables.second(waiver.end().getEpochSecond());
-          if (from <= end(cell) && to >= begin(cell) - relaxed) {
+          if (from <= end(cell) + relaxed && to >= begin(cell) - relaxed) {
             allowed = Math.max(allowed, relaxed);
           }
         }
       }
-      // A gap is judged on the ground, where light time may stretch or shrink it by seconds.
-      gapLimit[cell] = allowed + 60;
+      // A gap is judged on the ground, where light time may stretch or shrink it.
+      gapLimit[cell] = allowed + (int) Math.ceil(mostLight() - leastLight()) + 2;
     }
     return true;
   }
@@ -682,9 +722,28 @@ final class Cells {
   private void fillPauses(List<Guarded> guarded) {
     for (int l = 0; l < levelLengths.length; l++) {
       for (int cell = 0; cell < count; cell++) {
-        pauses[l][cell] = option(cell, levelLengths[l], guarded);
+        pauses[l][cell] = withShorter(option(cell, levelLengths[l], guarded), l, cell);
       }
     }
+  }
+
+  /**
+   * Craft with shorter repoints may begin earlier or later in the cell than the one that counts.
+   */
+  private PauseOption withShorter(PauseOption own, int l, int cell) {
+    PauseOption shorter = l == 0 ? null : pauses[l - 1][cell];
+    if (own == null || shorter == null || !relaxed.contains(Relaxation.PAUSE_ANYWHERE)) {
+      return own;
+    }
+    return new PauseOption(
+        Math.min(own.earliestStart(), shorter.earliestStart()),
+        Math.max(own.latestStart(), shorter.latestStart()),
+        Math.max(own.latestEnd(), shorter.latestEnd()),
+        own.bestStart(),
+        own.extra(),
+        own.merges() || shorter.merges(),
+        Math.max(own.joinsUntil(), shorter.joinsUntil()),
+        own.crowded() || shorter.crowded());
   }
 
   private PauseOption option(int cell, int repoint, List<Guarded> guarded) {
@@ -709,6 +768,7 @@ final class Cells {
     long bestCost = Long.MAX_VALUE;
     int extra = Integer.MAX_VALUE;
     boolean merges = false;
+    boolean crowded = false;
     int joins = 0;
     starts.sort(null);
     int reach =
@@ -729,6 +789,8 @@ final class Cells {
         for (Stop stop : list) {
           more -=
               Math.max(0, Math.min(stop.end(), start + repoint) - Math.max(stop.begin(), start));
+          int far = reach + warmUp;
+          crowded |= start - far <= stop.end() && start + repoint + far >= stop.begin();
           if (start - reach <= stop.end() && start + repoint + reach >= stop.begin()) {
             touches = true;
             joins = Math.max(joins, stop.end() + reach);
@@ -752,12 +814,14 @@ final class Cells {
       return new PauseOption(
           anywhere ? earliest : best,
           anywhere ? latest : best,
+          (anywhere ? latest : best) + repoint,
           best,
           extraAt(best, repoint),
           touches,
-          joins);
+          joins,
+          touches);
     }
-    return new PauseOption(earliest, latest, best, extra, merges, joins);
+    return new PauseOption(earliest, latest, latest + repoint, best, extra, merges, joins, crowded);
   }
 
   /**

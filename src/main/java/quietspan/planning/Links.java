@@ -2,6 +2,11 @@ package quietspan.planning;
 
 import java.util.Comparator;
 import java.util.List;
+import quietspan.model.Geometry;
+import quietspan.rules.Opportunities;
+import quietspan.rules.Opportunity;
+import quietspan.time.GroundInstant;
+import quietspan.time.Interval;
 
 /**
  * How many bits each craft can bring down in each sample interval: opportunities and link together.
@@ -59,6 +64,52 @@ final class Links {
         s = until;
       }
     }
+  }
+
+  /** Links over the opportunities of a scenario, with the confirmed contacts that they allow. */
+  static Links of(Tables tables, List<Opportunity> opportunities) {
+    List<Window> windows =
+        opportunities.stream()
+            .map(one -> window(tables, one.craft(), one.station(), one.antenna(), one.during()))
+            .toList();
+    List<Window> confirmed =
+        tables.scenario.calendars().confirmed().stream()
+            .map(one -> window(tables, one.craft(), one.station(), one.antenna(), one.during()))
+            .filter(
+                window ->
+                    windows.stream()
+                        .anyMatch(
+                            other ->
+                                other.craft() == window.craft()
+                                    && other.antenna() == window.antenna()
+                                    && other.begin() <= window.begin()
+                                    && window.end() <= other.end()))
+            .toList();
+    return new Links(tables, windows, confirmed);
+  }
+
+  private static Window window(
+      Tables tables, String craft, String station, String antenna, Interval<GroundInstant> during) {
+    return new Window(
+        tables.craft(craft),
+        tables.antenna(station, antenna),
+        tables.second(during.begin().epochSecond()),
+        tables.second(during.end().epochSecond()));
+  }
+
+  /**
+   * The same with every second that a legal contact may use: what the planner is offered keeps away
+   * from the edges of passes, and leaves out passes that are just long enough.
+   */
+  Links unguarded() {
+    if (tables.geometry.guardSeconds() == 0) {
+      return this;
+    }
+    Geometry exact =
+        new Geometry(
+            tables.geometry.sightLines(), tables.geometry.passes(), 0, tables.geometry.sources());
+    Links all = of(tables, Opportunities.of(tables.scenario, exact));
+    return new Links(tables, all.windows, confirmed);
   }
 
   int seconds(int craft, int antenna, int sample) {

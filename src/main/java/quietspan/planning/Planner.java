@@ -91,7 +91,7 @@ public final class Planner {
     this.progress = progress;
     this.stop = stop;
     this.tables = Tables.of(scenario, geometry);
-    this.links = linksOf(opportunities);
+    this.links = Links.of(tables, opportunities);
   }
 
   /**
@@ -130,56 +130,6 @@ public final class Planner {
 
   Seed seed() {
     return new Seed(tables, links, waivers, progress);
-  }
-
-  private Links linksOf(List<Opportunity> opportunities) {
-    List<Links.Window> windows = new ArrayList<>();
-    for (Opportunity one : opportunities) {
-      windows.add(
-          new Links.Window(
-              craft(one.craft()),
-              antenna(one.station(), one.antenna()),
-              tables.second(one.during().begin().epochSecond()),
-              tables.second(one.during().end().epochSecond())));
-    }
-    List<Links.Window> confirmed = new ArrayList<>();
-    for (ConfirmedContact one : scenario.calendars().confirmed()) {
-      Links.Window window =
-          new Links.Window(
-              craft(one.craft()),
-              antenna(one.station(), one.antenna()),
-              tables.second(one.during().begin().epochSecond()),
-              tables.second(one.during().end().epochSecond()));
-      boolean possible =
-          windows.stream()
-              .anyMatch(
-                  other ->
-                      other.craft() == window.craft()
-                          && other.antenna() == window.antenna()
-                          && other.begin() <= window.begin()
-                          && window.end() <= other.end());
-      if (possible) {
-        confirmed.add(window);
-      }
-    }
-    return new Links(tables, windows, confirmed);
-  }
-
-  private int craft(String name) {
-    for (int c = 0; c < tables.craftCount; c++) {
-      if (scenario.craft().get(c).name().equals(name)) {
-        return c;
-      }
-    }
-    throw new IllegalArgumentException("no craft " + name);
-  }
-
-  private int antenna(String station, String name) {
-    return tables.antennas.stream()
-        .filter(one -> one.station().name().equals(station) && one.dish().name().equals(name))
-        .findFirst()
-        .orElseThrow()
-        .index();
   }
 
   private Result run() {

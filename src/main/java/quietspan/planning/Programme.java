@@ -46,6 +46,8 @@ final class Programme {
    */
   record Solution(long loss, List<PauseStep> pauses, List<Opening> openings) {}
 
+  private static final int COMPARISONS_PER_LABEL = 256;
+
   private static final int SPENT = -1;
   private static final int FREE = -2;
   private static final int START = -1_000_000;
@@ -66,7 +68,9 @@ final class Programme {
   private final int width;
 
   private long labelsKept;
+  private long comparisons;
   private boolean gaveUp;
+  private boolean cut;
 
   /** Least loss still to come, asked for every label. */
   private final ToGo toGo;
@@ -98,10 +102,24 @@ final class Programme {
     int spanFromLatest;
     int pauseUntil;
 
-    /** Until when the present pause is already paid for, and who moved in it. */
-    int paidUntil;
+    /**
+     * Repoint time in the present span that is paid for apart from it: handed back where all of the
+     * span turns out to be lost.
+     */
+    long refund;
 
+    /** Until when a repoint may belong to the present pause. */
+    int joinUntil;
+
+    /** When the present pause began at the latest. */
+    int chainFrom;
+
+    /** What its repoints have cost so far. */
+    long chainPaid;
+
+    /** Who moved in it. */
     int chain;
+
     Label parent;
     int cell;
     int pauseStart = -1;
@@ -129,7 +147,7 @@ final class Programme {
         return Optional.empty();
       }
       labelsKept += labels.size();
-      if (labelsKept > work) {
+      if (labelsKept() > work) {
         gaveUp = true;
         return Optional.empty();
       }
@@ -147,6 +165,7 @@ final class Programme {
       }
     }
     if (best == null || bestLoss >= cutoff) {
+      cut |= best != null;
       return Optional.empty();
     }
     return Optional.of(solution(best, bestLoss));
@@ -203,13 +222,19 @@ final class Programme {
     return new Solution(loss, pauses, openings);
   }
 
+  /** Labels kept, and what it took to compare them. */
   long labelsKept() {
-    return labelsKept;
+    return labelsKept + comparisons / COMPARISONS_PER_LABEL;
   }
 
   /** Whether the last answer is empty because the work allowed was used up. */
   boolean gaveUp() {
     return gaveUp;
+  }
+
+  /** Whether some label was dropped for its loss alone: without any, no higher cutoff helps. */
+  boolean cut() {
+    return cut;
   }
 
   private Label first() {
@@ -253,13 +278,9 @@ final class Programme {
     int must = cells.mustServe(cell);
     // Every set of free beams may open here, the empty set included.
     for (int opened = free; ; opened = (opened - 1) & free) {
-      if (((open | opened) & must) != must) {
-        if (opened == 0) {
-          break;
-        }
-        continue;
+      if (((open | opened) & must) == must) {
+        step(label, cell, open, opened, 0, 0, out);
       }
-      step(label, cell, open, opened, 0, 0, out);
       pauses(label, cell, open, opened, out);
       if (opened == 0) {
         break;
@@ -270,24 +291,61 @@ final class Programme {
   private void pauses(Label label, int cell, int open, int opened, List<Label> out) {
     int all = (1 << craftCount) - 1;
     for (int moved = 1; moved <= all; moved++) {
-      if (!worthMoving(label, moved, opened)) {
+      if (!worthMoving(label, moved, opened)
+          || ((open | opened | renewed(moved, cell)) & cells.mustServe(cell))
+              != cells.mustServe(cell)) {
         continue;
       }
       step(label, cell, open, opened, moved, cells.pauseLevel(moved), out);
     }
   }
 
-  /** A craft whose aim is free already gains nothing by moving; leave such moves out. */
-  private boolean worthMoving(Label label, int moved, int opened) {
+  /** Craft that move in a pause from a cell and may serve in the rest of it. */
+  private int renewed(int moved, int cell) {
+    int renewed = 0;
     for (int c = 0; c < craftCount; c++) {
-      if ((moved >> c & 1) != 0
-          && label.code[c] <= FREE
-          && label.code[c] != START
-          && (opened >> c & 1) == 0) {
-        return false;
+      if ((moved >> c & 1) != 0 && cells.usable(c, cell) && cells.availableInSameCell(c, cell)) {
+        renewed |= 1 << c;
       }
     }
-    return true;
+    return renewed;
+  }
+
+  /**
+   * A craft whose aim is free already gains nothing by moving but the data that a pause saves: one
+   * such craft is enough, and only where it makes the pause longer than the others do.
+   */
+  private boolean worthMoving(Label label, int moved, int opened) {
+    int idle = 0;
+    int longest = 0;
+    for (int c = 0; c < craftCount; c++) {
+      if ((moved >> c & 1) == 0) {
+        continue;
+      }
+      if (label.code[c] <= FREE && label.code[c] != START && (opened >> c & 1) == 0) {
+        idle |= 1 << c;
+      } else {
+        longest = Math.max(longest, cells.repointLength(c));
+      }
+    }
+    return idle == 0
+        || (!keepParents
+            && cells.pausesSave()
+            && Integer.bitCount(idle) == 1
+            && cells.repointLength(Integer.numberOfTrailingZeros(idle)) > longest
+            && !hasTwin(label, Integer.numberOfTrailingZeros(idle)));
+  }
+
+  /** Whether an earlier craft would do as well for a pause that moves nobody who needs it. */
+  private boolean hasTwin(Label label, int craft) {
+    boolean twin = false;
+    for (int c = 0; c < craft && (label.chain == 0 || !cells.movesOncePerPause()); c++) {
+      twin |=
+          cells.repointLength(c) == cells.repointLength(craft)
+              && label.code[c] <= FREE
+              && label.code[c] != START;
+    }
+    return twin;
   }
 
   private boolean serves(int craft, int code, int cell) {
@@ -300,18 +358,26 @@ final class Programme {
     int spanFrom = label.spanFrom;
     int spanFromLatest = label.spanFromLatest;
     int pauseUntil = label.pauseUntil;
-    int paidUntil = label.paidUntil;
+    int joinUntil = label.joinUntil;
+    int chainFrom = label.chainFrom;
+    long chainPaid = label.chainPaid;
     int chain = label.chain;
+    long refund = label.refund;
     int pauseStart = -1;
+    int lastStopEnd = cells.longAgo();
+    boolean lostAnyway = false;
     // Interruptions that begin inside this cell end the span.
     for (Cells.Stop stop : aim == Aim.LOSS ? cells.stopsFrom(cell) : List.<Cells.Stop>of()) {
-      loss += stop.length();
-      if (!stop.closeToPrevious()) {
-        loss += spanCost(stop.begin(), spanFrom, stop.begin(), spanFromLatest);
-      }
-      loss += cells.warmUp();
+      lostAnyway |= mayBeLost(stop.begin(), spanFrom, spanFromLatest, refund);
+      loss +=
+          stop.length()
+              + spanCost(stop.begin(), spanFrom, stop.begin(), spanFromLatest, refund)
+              + cells.warmUp();
       spanFrom = stop.end();
       spanFromLatest = stop.end();
+      lastStopEnd = stop.end();
+      // A repoint may stick out of the interruption.
+      refund = chain != 0 && joinUntil > stop.end() ? refund : 0;
     }
     if (moved != 0) {
       Cells.PauseOption option = cells.pause(cell, level);
@@ -319,53 +385,72 @@ final class Programme {
         return;
       }
       int length = cells.levelLength(level);
-      int latest = option.latestStart() + length;
+      int latest = option.latestEnd();
+      int until = option.earliestStart() + length;
       pauseStart = option.bestStart();
-      boolean joins = chain != 0 && option.earliestStart() <= spanFromLatest;
-      if (joins && cells.movesOncePerPause() && (chain & moved) != 0) {
-        return;
+      boolean twice = cells.movesOncePerPause() && (chain & moved) != 0;
+      boolean joins = chain != 0 && !twice && option.earliestStart() <= joinUntil;
+      if (!joins) {
+        chainFrom = option.latestStart();
+        chainPaid = 0;
       }
+      // A pause that grows costs what is not paid for yet; one of its own never less than this.
+      long growth =
+          Math.min(
+              (long) length + cells.warmUp(),
+              Math.max(0, cells.quietSeconds(chainFrom, until) - chainPaid));
       if (aim == Aim.PAUSES) {
         // A repoint that may touch the pause before, or the interruption that pause belongs to, is
-        // no pause of its own. Here the span fields say until when that can be.
+        // no pause of its own.
         loss += joins ? 0 : 1;
-        spanFrom = Math.max(latest, option.joinsUntil());
-        spanFromLatest = joins ? Math.max(spanFromLatest, spanFrom) : spanFrom;
-        spanFrom = spanFromLatest;
+        latest = Math.max(latest, option.joinsUntil());
+      } else if (lostAnyway) {
+        // It may lie in a span before an interruption of this cell that counts nothing, or less
+        // than
+        // its warm-up: that has been paid in full.
+        chainFrom = Math.max(chainFrom, lastStopEnd);
       } else if (option.merges()) {
-        loss += option.extra();
+        long extra = joins ? Math.min(option.extra(), growth) : option.extra();
+        loss += extra;
+        refund += extra;
+        chainPaid += extra;
       } else if (joins) {
         // The pause grows; what was paid for it so far counts.
-        int until = option.earliestStart() + length;
-        loss += Math.max(0, until - paidUntil);
-        paidUntil = Math.max(paidUntil, until);
+        loss += growth;
+        chainPaid += growth;
         spanFrom = Math.max(spanFrom, until);
         spanFromLatest = Math.max(spanFromLatest, latest);
       } else {
         loss +=
-            spanCost(option.latestStart(), spanFrom, option.earliestStart(), spanFromLatest)
+            spanCost(option.latestStart(), spanFrom, option.earliestStart(), spanFromLatest, refund)
                 + length
                 + cells.warmUp();
-        spanFrom = option.earliestStart() + length;
-        spanFromLatest = latest;
-        paidUntil = latest;
+        // It may stand before an interruption of this cell or after it.
+        spanFrom = lastStopEnd == cells.longAgo() ? until : Math.min(until, lastStopEnd);
+        spanFromLatest = Math.max(latest, lastStopEnd);
+        refund = 0;
+        chainPaid = length;
       }
+      joinUntil = joins ? Math.max(joinUntil, latest) : latest;
       chain = joins ? chain | moved : moved;
-      pauseUntil = Math.max(pauseUntil, latest);
+      pauseUntil = Math.max(pauseUntil, option.latestEnd());
     }
-    boolean chained = chain != 0 && spanFromLatest >= cells.end(cell);
-    boolean young = spanFromLatest > cells.end(cell) - cells.warmUp();
-    if (loss + toGo.from(cells.end(cell), chained, young) >= cutoff) {
+    boolean chained = chain != 0 && joinUntil >= cells.end(cell);
+    boolean young = refund > 0 || spanFromLatest > cells.end(cell) - cells.warmUp();
+    long still = toGo.from(cells.end(cell), chained, young, refund);
+    if (loss + still >= cutoff) {
+      cut |= still < ToGo.NEVER;
       return;
     }
     boolean reduced = moved != 0 || pauseUntil > cells.begin(cell);
-    int serving = open | opened;
+    int renewed = renewed(moved, cell);
+    int serving = open | opened | renewed;
     long capacity = 0;
     if (serving != 0) {
       long sum = 0;
       for (int c = 0; c < craftCount; c++) {
         if ((serving >> c & 1) != 0) {
-          int code = (opened >> c & 1) != 0 ? cell : label.code[c];
+          int code = ((opened | renewed) >> c & 1) != 0 ? cell : label.code[c];
           sum += code == START ? cells.startCapacity(c, cell) : cells.capacity(c, code, cell);
         }
       }
@@ -410,13 +495,16 @@ final class Programme {
     next.loss = loss;
     next.backlog = backlog;
     next.gapSince = gapSince;
-    int old = cells.end(cell) - (aim == Aim.LOSS ? cells.matureAge() : 0);
+    long old = cells.end(cell) - cells.matureAge() - refund;
     boolean mature = spanFrom < old && spanFromLatest < old;
     next.spanFrom = mature ? cells.longAgo() : spanFrom;
     next.spanFromLatest = mature ? cells.longAgo() : spanFromLatest;
     next.pauseUntil = pauseUntil > cells.end(cell) ? pauseUntil : 0;
+    next.refund = mature ? 0 : refund;
+    next.joinUntil = chained ? joinUntil : 0;
     next.chain = chained ? chain : 0;
-    next.paidUntil = chained ? paidUntil : 0;
+    next.chainFrom = chained ? chainFrom : 0;
+    next.chainPaid = chained ? chainPaid : 0;
     next.cell = cell;
     if (keepParents) {
       // Cells without an event are skipped on the way back.
@@ -441,24 +529,41 @@ final class Programme {
 
   /**
    * What ending a span costs beyond the warm-up already charged at its begin: everything when even
-   * its longest reading is too short to count, nothing otherwise.
+   * its longest reading is too short to count, nothing otherwise; less what repoints inside it have
+   * cost already.
    */
-  private long spanCost(int latestEnd, int earliestBegin, int earliestEnd, int latestBegin) {
+  private long spanCost(
+      int latestEnd, int earliestBegin, int earliestEnd, int latestBegin, long refund) {
     if (earliestBegin == cells.longAgo()) {
       return 0;
     }
     long longest = (long) latestEnd - earliestBegin;
-    long shortest = Math.max(0, (long) earliestEnd - latestBegin);
     long charged = cells.warmUpInside(earliestBegin);
-    long inside = earliestBegin < 0 ? Math.min(shortest, Math.max(0, earliestEnd)) : shortest;
+    long inside = Math.max(0, inside(earliestBegin, earliestEnd, latestBegin) - refund);
     return longest < cells.minimumSpan() ? inside - charged : Math.min(0, inside - charged);
+  }
+
+  /** The part of the shortest reading of a span that lies inside the period. */
+  private static long inside(int earliestBegin, int earliestEnd, int latestBegin) {
+    long shortest = Math.max(0, (long) earliestEnd - latestBegin);
+    return earliestBegin < 0 ? Math.min(shortest, Math.max(0, earliestEnd)) : shortest;
+  }
+
+  /** Whether a span may be so short that a repoint in it costs nothing more. */
+  private boolean mayBeLost(int end, int earliestBegin, int latestBegin, long refund) {
+    if (earliestBegin == cells.longAgo()) {
+      return false;
+    }
+    return end - latestBegin < cells.minimumSpan()
+        || inside(earliestBegin, end, latestBegin) - refund
+            < cells.warmUpInside(earliestBegin) + cells.longestRepoint();
   }
 
   private long lastSpanCost(Label label) {
     if (label.spanFrom == cells.longAgo()) {
       return 0;
     }
-    long inside = Math.max(0, cells.length() - Math.max(0, label.spanFromLatest));
+    long inside = Math.max(0, cells.length() - Math.max(0, label.spanFromLatest) - label.refund);
     return Math.min(0, inside - cells.warmUpInside(label.spanFrom));
   }
 
@@ -531,6 +636,7 @@ final class Programme {
 
   private boolean beatenByAny(Label label, List<Label> rivals, int cell) {
     for (Label rival : rivals) {
+      comparisons++;
       if (beats(rival, label, cell)) {
         return true;
       }
@@ -565,28 +671,46 @@ final class Programme {
     }
     if (better.chain != 0
         && worse.chain != 0
-        && (better.chain != worse.chain || better.paidUntil < worse.paidUntil)) {
+        && (better.chain != worse.chain || !growsAsCheaply(better, worse))) {
       return false;
     }
     return better.loss + spanPenalty(better, worse, cell) <= worse.loss;
   }
 
+  private static boolean growsAsCheaply(Label better, Label worse) {
+    return better.chainFrom <= worse.chainFrom
+        ? better.chainFrom + better.chainPaid >= worse.chainFrom + worse.chainPaid
+        : better.chainPaid >= worse.chainPaid;
+  }
+
   /** By how much {@code worse} may still catch up because of where its span began. */
   private long spanPenalty(Label better, Label worse, int cell) {
+    boolean growsAlone = worse.chain != 0 && better.chain == 0;
+    boolean longer = worse.chain != 0 && better.joinUntil < worse.joinUntil;
     if (aim == Aim.PAUSES) {
-      return better.spanFrom < worse.spanFrom ? 1 : 0;
+      return growsAlone || longer ? 1 : 0;
     }
-    if (better.spanFrom == worse.spanFrom && better.spanFromLatest == worse.spanFromLatest) {
-      return 0;
-    }
+    boolean sameSpan =
+        better.spanFrom == worse.spanFrom && better.spanFromLatest == worse.spanFromLatest;
     long penalty = 0;
+    if (growsAlone || longer) {
+      // The worse label may still lengthen its pause cheaply, where the better one ends its span.
+      penalty += cells.longestRepoint() + cells.warmUp();
+      penalty += better.spanFrom == cells.longAgo() ? 0 : cells.minimumSpan();
+    }
+    if (worse.refund > better.refund || (worse.refund > 0 && !sameSpan)) {
+      penalty += worse.refund + (sameSpan ? 0 : cells.warmUp());
+    }
+    if (sameSpan) {
+      return penalty;
+    }
     int now = cells.begin(cell);
     if (better.spanFrom > worse.spanFrom || better.spanFromLatest > worse.spanFromLatest) {
       // The better label's span is younger and may turn out too short to count.
       penalty += cells.minimumSpan();
     }
     if (worse.spanFromLatest > now - cells.warmUp() && worse.spanFrom != cells.longAgo()) {
-      // The worse label may still lengthen its pause cheaply or get its warm-up back.
+      // The worse label may still get its warm-up back.
       penalty += cells.longestRepoint() + cells.warmUp();
     }
     return penalty;

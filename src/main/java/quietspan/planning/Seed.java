@@ -99,7 +99,7 @@ final class Seed {
     }
     for (int i = 0; i < PRETENCES.size() && best == null; i++) {
       for (int grid : grids(coarse)) {
-        Optional<Draft> draft = draft(PRETENCES.get(i), grid, ToGo.nothing());
+        Optional<Draft> draft = draft(PRETENCES.get(i), grid, ToGo.nothing(tables.warmUp));
         if (draft.isPresent()) {
           best = fill(draft.get(), FIRST_GUARD);
           bestFixed = List.copyOf(fixed);

@@ -56,6 +56,7 @@ final class Tables {
   }
 
   final Scenario scenario;
+  final Geometry geometry;
   final SightLines sky;
   final long epoch;
   final int length;
@@ -113,6 +114,7 @@ final class Tables {
 
   private Tables(Scenario scenario, Geometry geometry, int samples) {
     this.scenario = scenario;
+    this.geometry = geometry;
     this.sky = geometry.sightLines();
     this.epoch = scenario.period().begin().epochSecond();
     this.length = (int) scenario.period().length().toSeconds();
@@ -180,6 +182,23 @@ final class Tables {
             .lastContactEnd()
             .map(end -> second(end.epochSecond()))
             .orElse(latest == Integer.MIN_VALUE ? lastContactEndOf[0] : latest);
+  }
+
+  int craft(String name) {
+    for (int c = 0; c < craftCount; c++) {
+      if (scenario.craft().get(c).name().equals(name)) {
+        return c;
+      }
+    }
+    throw new IllegalArgumentException("no craft " + name);
+  }
+
+  int antenna(String station, String name) {
+    return antennas.stream()
+        .filter(one -> one.station().name().equals(station) && one.dish().name().equals(name))
+        .findFirst()
+        .orElseThrow()
+        .index();
   }
 
   /** Seconds since the begin of the period, kept within what an int can hold with room to spare. */

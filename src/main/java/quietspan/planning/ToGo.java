@@ -29,31 +29,37 @@ final class ToGo {
     this.growing = growing;
   }
 
-  /** Knows nothing: zero everywhere. */
-  static ToGo nothing() {
-    return new ToGo(Integer.MAX_VALUE / 4, 0, new long[2], new long[2]);
+  /**
+   * Knows nothing: zero everywhere, of which a young span may hand back no more than its warm-up.
+   */
+  static ToGo nothing(int warmUp) {
+    return new ToGo(Integer.MAX_VALUE / 4, warmUp, new long[2], new long[2]);
   }
 
-  /** Least loss in the unit of the aim from an instant (s) on. */
-  long from(int second, boolean growingPause, boolean youngSpan) {
+  /**
+   * Least loss still to be booked from an instant (s) on, in the unit of the aim; below zero where
+   * more may be handed back than there is to come: the warm-up of a span that is younger than it,
+   * and repoints in a span that turns out to be lost.
+   */
+  long from(int second, boolean growingPause, boolean youngSpan, long refund) {
     int cell = Math.min(fresh.length - 1, (second + cellLength - 1) / cellLength);
     long least = growingPause ? growing[cell] : fresh[cell];
-    // The warm-up of a span that is younger than it may still be handed back.
-    return youngSpan ? Math.max(0, least - warmUp) : least;
+    return least >= NEVER ? least : least - refund - (youngSpan ? warmUp : 0);
   }
 
   static ToGo of(Cells cells, Programme.Aim aim) {
     int n = cells.count();
+    boolean losing = aim == Programme.Aim.LOSS;
+    ToGo nothing = nothing(losing ? cells.warmUp() : 0);
     for (int c = 0; c < cells.craftCount(); c++) {
       if (!cells.monotone(c)) {
-        return nothing();
+        return nothing;
       }
     }
     int h = cells.end(0);
     Programme programme =
-        new Programme(cells, aim, false, nothing(), Long.MAX_VALUE / 4, Long.MAX_VALUE);
+        new Programme(cells, aim, false, nothing, Long.MAX_VALUE / 4, Long.MAX_VALUE);
     int saving = (cells.longestRepoint() + h - 1) / h + 1;
-    boolean losing = aim == Programme.Aim.LOSS;
     long[] fresh = new long[n + 2];
     long given = 0;
     for (int i = n - 1; i >= 0; i--) {
@@ -84,9 +90,11 @@ final class ToGo {
             long cost = 1;
             if (losing && option.merges()) {
               cost = Math.max(option.extra(), (long) renewed * h - option.joinsUntil());
+            } else if (losing && option.crowded()) {
+              cost = option.extra();
             } else if (losing) {
               long grown = (long) Math.max(0, more - 1) * h - cells.stopsWithin(j, j + more + 1);
-              cost = Math.max(length, grown) + cells.warmUp();
+              cost = Math.max(length, grown) + cells.warmUpAfter(option.latestEnd());
             }
             long passed = given - cells.stopsFromOn(renewed, losing);
             least = Math.min(least, cost + passed + fresh[renewed]);
